@@ -106,7 +106,3 @@ func (q Quantity) Compare(r Quantity) (int, error) {
 	}
 	return 0, nil
 }
-
-// String writes the quantity with five significant digits in the unit that
-// the trade uses for its dimension.
-func (q Quantity) String() string { return Standard().Text(q, 5) }

@@ -88,7 +88,7 @@ type (
 
 // Kind is the set of types that carry a quantity: every typed quantity of this
 // package, and a host's own float64 types with a method Dimension.
-type Kind interface{ ~float64 }
+type Kind interface{ ~float64 | ~int }
 
 // si builds a dimension from whole exponents of mass, length, time, current
 // and temperature; things sets counted ones.
