@@ -1,0 +1,28 @@
+package study
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/stat/distuv"
+)
+
+// CoverageFactor is the k with which k times the standard uncertainty covers the
+// probability p, 0 < p < 1, on both sides together: from the t-distribution with
+// dof degrees of freedom, which need not be whole, 0 standing for infinitely many
+// (JCGM 100:2008, G.3). Error: ErrRange.
+func CoverageFactor(p, dof float64) (float64, error) {
+	if !(p > 0 && p < 1) {
+		return 0, refuse(ErrRange, "%g is no coverage probability: it lies between 0 and 1", p)
+	}
+	k := math.Sqrt2 * math.Erfinv(p)
+	if dof != 0 {
+		if !(dof >= minimumDoF) || !finite(dof) {
+			return 0, refuse(ErrRange, "%g is no number of degrees of freedom", dof)
+		}
+		k = distuv.StudentsT{Sigma: 1, Nu: dof}.Quantile(1 - (1-p)/2)
+	}
+	if !finite(k) {
+		return 0, refuse(ErrRange, "a coverage probability of %g is too near to 1", p)
+	}
+	return k, nil
+}
