@@ -1,0 +1,96 @@
+package main
+
+import (
+	"context"
+	"errors"
+	"os"
+	"path/filepath"
+	"syscall"
+
+	"golang.org/x/term"
+
+	"example.com/dosewright/repl"
+	"example.com/dosewright/repl/terminal"
+)
+
+// prompt runs the session that is typed or piped in.
+func prompt(ctx context.Context, std stdio) int {
+	s, err := newSession(".")
+	if err != nil {
+		return std.wrong(err.Error())
+	}
+	e := &engine{session: s.Session}
+	err = terminal.Run(ctx, e, terminal.Options{
+		In: std.in, Out: std.screen, Err: std.problems,
+		Term: os.Getenv("TERM"), NoColor: os.Getenv("NO_COLOR") != "",
+		Greeting:    "dosewright " + version() + "; help shows the way in, quit leaves",
+		HistoryFile: historyFile(),
+	})
+	var ended *terminal.Ended
+	switch {
+	case errors.As(err, &ended):
+		return signalled(ended)
+	case err != nil:
+		return std.wrong(err.Error())
+	}
+	if f, ok := std.in.(*os.File); ok && term.IsTerminal(int(f.Fd())) {
+		return statusFine // what a person mistyped is no failure
+	}
+	return e.status
+}
+
+// signalled is the status that shells give to a program that a signal ended.
+func signalled(ended *terminal.Ended) int {
+	if s, ok := ended.Signal.(syscall.Signal); ok {
+		return 128 + int(s)
+	}
+	return statusRefused
+}
+
+// historyFile is where lines are kept from one run to the next, "" when the
+// system names no place.
+func historyFile() string {
+	dir, err := os.UserConfigDir()
+	if err != nil {
+		return ""
+	}
+	dir = filepath.Join(dir, "dosewright")
+	if os.MkdirAll(dir, 0o700) != nil {
+		return ""
+	}
+	return filepath.Join(dir, "history")
+}
+
+// engine joins a session to the terminal.
+type engine struct {
+	session *repl.Session
+	status  int
+}
+
+func (e *engine) Feed(ctx context.Context, line string) terminal.Answer {
+	r := e.session.Feed(ctx, line)
+	switch {
+	case r.Err != nil:
+		e.status = statusRefused
+	case r.Failed:
+		e.status = max(e.status, statusMoved)
+	}
+	a := terminal.Answer{More: r.More, Quit: r.Quit}
+	for _, l := range r.Lines() {
+		a.Lines = append(a.Lines, terminal.Line{Text: l.Text, Kind: kinds[l.Tone]})
+	}
+	return a
+}
+
+func (e *engine) Complete(line string, cursor int) (int, []string) {
+	return e.session.Complete(line, cursor)
+}
+
+func (e *engine) Hint(line string, cursor int) string { return e.session.Hint(line, cursor) }
+
+func (e *engine) Abandon() { e.session.Cancel() }
+
+var kinds = map[repl.Tone]terminal.Kind{
+	repl.Plain: terminal.Plain, repl.Marks: terminal.Mark, repl.Refused: terminal.Refusal,
+	repl.WayOn: terminal.Plain, repl.Warning: terminal.Warning, repl.Good: terminal.Good, repl.Bad: terminal.Bad,
+}

@@ -1,0 +1,104 @@
+package main
+
+import (
+	"context"
+	"fmt"
+	"os"
+	"path/filepath"
+	"strings"
+
+	"example.com/dosewright/repl"
+)
+
+// replay runs session files again and compares their replies.
+func replay(ctx context.Context, args []string, std stdio) int {
+	asJSON, update := false, false
+	for len(args) > 0 && strings.HasPrefix(args[0], "--") {
+		switch args[0] {
+		case "--json":
+			asJSON = true
+		case "--update":
+			update = true
+		default:
+			return std.wrong(args[0] + " is no option of replay; they are --json and --update")
+		}
+		args = args[1:]
+	}
+	if len(args) == 0 {
+		return std.wrong("replay needs a session file: dosewright replay daily.budget")
+	}
+	status := statusFine
+	for _, name := range args {
+		status = max(status, replayOne(ctx, name, asJSON, update, std))
+	}
+	return status
+}
+
+func replayOne(ctx context.Context, name string, asJSON, update bool, std stdio) int {
+	dir, base := filepath.Split(name)
+	c, err := config(filepath.Clean(dir))
+	if err != nil {
+		return std.wrong(err.Error())
+	}
+	r, err := repl.Replay(ctx, c, base)
+	if err != nil {
+		return std.wrong(err.Error())
+	}
+	if asJSON {
+		writeReplay(r, std)
+	} else {
+		for _, l := range r.Lines() {
+			fmt.Fprintln(std.out, l.Text)
+		}
+	}
+	if update {
+		return rewrite(dir, base, r, asJSON, std)
+	}
+	switch {
+	case len(r.Refused) > 0:
+		return statusRefused
+	case r.Moved():
+		return statusMoved
+	}
+	return statusFine
+}
+
+// rewrite puts the replies of this run in the place of the recorded ones.
+func rewrite(dir, base string, r *repl.Replayed, asJSON bool, std stdio) int {
+	root, err := os.OpenRoot(filepath.Clean(dir))
+	if err != nil {
+		return std.wrong(err.Error())
+	}
+	defer root.Close()
+	if err := writeWhole(root, base, r.Updated); err != nil {
+		return std.wrong(err.Error())
+	}
+	if !asJSON {
+		fmt.Fprintf(std.out, "%s: the replies of this run are recorded\n", base)
+	}
+	return statusFine
+}
+
+// writeReplay writes every reply, then every drift, one object a line.
+func writeReplay(r *repl.Replayed, std stdio) {
+	for _, rec := range r.Records {
+		writeJSON(rec, std)
+	}
+	type change struct {
+		Name string `json:"name"`
+		Was  string `json:"was"`
+		Now  string `json:"now"`
+	}
+	for _, d := range r.Drifts {
+		moved := []change{}
+		for _, c := range d.MovedBy {
+			moved = append(moved, change(c))
+		}
+		writeJSON(struct {
+			Line     int      `json:"line"`
+			Recorded []string `json:"recorded"`
+			Now      []string `json:"now"`
+			MovedBy  []change `json:"moved_by"`
+		}{d.Line, d.Was, d.Now, moved}, std)
+	}
+}

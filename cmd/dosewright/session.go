@@ -1,0 +1,58 @@
+package main
+
+import (
+	"context"
+	"errors"
+	"io/fs"
+	"os"
+	"path/filepath"
+
+	"example.com/dosewright/repl"
+)
+
+// folder is a session whose files lie in one folder and below.
+type folder struct {
+	*repl.Session
+	dir string
+}
+
+// config is what a session in a folder starts from: it reads below the folder
+// and writes there, whole or not at all. Links that lead outside are refused.
+func config(dir string) (repl.Config, error) {
+	root, err := os.OpenRoot(dir)
+	if err != nil {
+		return repl.Config{}, errors.New(dir + " cannot be opened: " + reason(err))
+	}
+	return repl.Config{
+		Files:   root.FS(),
+		Save:    func(name string, text []byte) error { return writeWhole(root, name, text) },
+		Version: version(),
+	}, nil
+}
+
+func newSession(dir string) (*folder, error) {
+	c, err := config(dir)
+	if err != nil {
+		return nil, err
+	}
+	return &folder{repl.NewSession(c), dir}, nil
+}
+
+// bring imports a file named on the command line.
+func (f *folder) bring(ctx context.Context, name string) error {
+	path, err := filepath.Rel(f.dir, name)
+	if err != nil {
+		return err
+	}
+	r := f.Feed(ctx, "import \""+filepath.ToSlash(path)+"\"")
+	return r.Err
+}
+
+// reason is what an error of the file system says, without the path.
+func reason(err error) string {
+	var at *fs.PathError
+	if errors.As(err, &at) {
+		return at.Err.Error()
+	}
+	return err.Error()
+}

@@ -1,0 +1,83 @@
+package program
+
+import (
+	"fmt"
+
+	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
+)
+
+// Transmission makes the node of the factor between two planes of a chain; it
+// stands at to/from.
+func (c *Checker) Transmission(ch *Chain, from, to Plane, at syntax.Span) (*Node, error) {
+	steps, against, err := ch.part(from, to)
+	if err != nil {
+		return nil, syntax.Fail(at, err.Error(), "a chain's line at NAME makes a plane")
+	}
+	n := constant(1, Type{}, at, c.Owner)
+	for _, s := range steps {
+		if s.All != nil {
+			n = &Node{op: opMul, args: []*Node{n, s.All}, At: at, Owner: c.Owner}
+		}
+	}
+	if against {
+		n = &Node{op: opDiv, args: []*Node{constant(1, Type{}, at, c.Owner), n}, At: at, Owner: c.Owner}
+	}
+	n.Type = Type{Plane: to.times(from, -1)}
+	return n, nil
+}
+
+// Carry makes the node of a power, energy, photon number or rate taken from its
+// own plane to another; fluence and irradiance go between MASK and WAFER alone,
+// where the reduction gives the ratio of areas.
+func (c *Checker) Carry(n *Node, x syntax.Expr, ch *Chain, to Plane, at syntax.Span) (*Node, error) {
+	t := n.Type
+	if t.Plane == "" || len(t.Plane.exponents()) != 1 || t.Plane.exponents()[string(t.Plane)] != 6 {
+		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" stands at no single plane to be carried from", "say where it stands: "+c.text(x.Span())+" at IF")
+	}
+	factor, err := c.Transmission(ch, t.Plane, to, at)
+	if err != nil {
+		return nil, err
+	}
+	areas, err := c.areaRatio(t, x, ch, to, at)
+	if err != nil {
+		return nil, err
+	}
+	out := &Node{op: opMul, args: []*Node{n, factor}, At: at, Owner: c.Owner}
+	if areas != nil {
+		out = &Node{op: opMul, args: []*Node{out, areas}, At: at, Owner: c.Owner}
+	}
+	out.Type = Type{Dim: t.Dim, Plane: to}
+	return out, nil
+}
+
+// areaRatio is nil for what is not per area; else the factor by which the
+// reduction concentrates, which exists between MASK and WAFER alone.
+func (c *Checker) areaRatio(t Type, x syntax.Expr, ch *Chain, to Plane, at syntax.Span) (*Node, error) {
+	switch d := t.Dim.WithoutCounted(); d {
+	case units.DimensionOf[units.Power](), units.DimensionOf[units.Energy](), units.DimensionOf[units.Count](), units.DimensionOf[units.Rate]():
+		return nil, nil
+	case units.DimensionOf[units.Fluence](), units.DimensionOf[units.Irradiance](), units.DimensionOf[units.ArealDensity]():
+	default:
+		return nil, syntax.Fail(x.Span(), c.describe(t)+" is not carried by a chain", "carry takes power, energy, photon number and rate; fluence and irradiance between MASK and WAFER")
+	}
+	if t.Plane == to {
+		return nil, nil
+	}
+	toWafer := t.Plane == "MASK" && to == "WAFER"
+	if !toWafer && !(t.Plane == "WAFER" && to == "MASK") {
+		return nil, syntax.Fail(x.Span(), fmt.Sprintf("%s is per area, and the beam's area at %s is not known", c.describe(t), to),
+			"fluence and irradiance go between MASK and WAFER; carry a power elsewhere")
+	}
+	for _, s := range ch.Steps {
+		if s.X == nil {
+			continue
+		}
+		area := &Node{op: opMul, args: []*Node{s.X, s.Y}, At: at, Owner: c.Owner}
+		if toWafer {
+			return area, nil
+		}
+		return &Node{op: opDiv, args: []*Node{constant(1, Type{}, at, c.Owner), area}, At: at, Owner: c.Owner}, nil
+	}
+	return nil, syntax.Fail(at, ch.Name+" states no reduction, which gives the ratio of areas between MASK and WAFER", "add the line reduction: 4, 4 to the chain")
+}

@@ -1,0 +1,224 @@
+package program
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
+)
+
+// Chain is what light meets, in order: planes and elements.
+type Chain struct {
+	Name  string
+	Steps []Step
+}
+
+// Step is a plane, a reduction or an element of a chain.
+type Step struct {
+	Plane     Plane // set for a plane only
+	Label     string
+	Text      string // the line as written
+	Note      string
+	Crossings *Node // how often light meets the element; nil for once
+	Factor    *Node // of one crossing
+	All       *Node // of all crossings, between 0 and 1 by its own check
+	X, Y      *Node // reduction, for the step of that label
+	Shared    bool  // all crossings share one factor; false for independent
+}
+
+func (s Step) nodes() []*Node {
+	var list []*Node
+	for _, n := range []*Node{s.Crossings, s.Factor, s.X, s.Y} {
+		if n != nil {
+			list = append(list, n)
+		}
+	}
+	return list
+}
+
+// ChainBlock checks the block of a chain.
+func (c *Checker) ChainBlock(b *syntax.Block) (*Node, error) {
+	ch := &Chain{Name: b.Name}
+	for _, line := range b.Lines {
+		step, err := c.step(ch, line)
+		if err != nil {
+			return nil, err
+		}
+		ch.Steps = append(ch.Steps, step)
+	}
+	if len(ch.planes()) < 2 {
+		return nil, syntax.Fail(b.NameAt, fmt.Sprintf("%s has %s; it needs two or more to lead from one to the other", b.Name, named(len(ch.planes()), "plane")),
+			"write at IF, then the elements, then at WAFER")
+	}
+	if err := c.factorPlanes(ch, b); err != nil {
+		return nil, err
+	}
+	return &Node{op: opChain, chain: ch, Type: Type{Kind: ChainKind}, At: b.NameAt, Owner: c.Owner}, nil
+}
+
+func (ch *Chain) planes() []Plane {
+	var list []Plane
+	for _, s := range ch.Steps {
+		if s.Plane != "" {
+			list = append(list, s.Plane)
+		}
+	}
+	return list
+}
+
+// Planes lists the planes of the chain in the order of the light.
+func (ch *Chain) Planes() []Plane { return ch.planes() }
+
+func (c *Checker) step(ch *Chain, line syntax.BlockLine) (Step, error) {
+	s := Step{Label: line.Label, Text: line.Text, Note: line.Note, Shared: !line.Independent}
+	if line.Plane != "" {
+		s.Plane = Plane(line.Plane)
+		if slices.Contains(ch.planes(), s.Plane) {
+			return s, syntax.Fail(line.Where, "the plane "+line.Plane+" stands twice in this chain", "give the second one another name")
+		}
+		return s, nil
+	}
+	for _, before := range ch.Steps {
+		if before.Label == line.Label {
+			return s, syntax.Fail(line.Where, "the label "+line.Label+" stands twice in this chain", "give the second one another, such as "+line.Label+"_2")
+		}
+	}
+	switch line.Label {
+	case "reduction":
+		return c.reduction(s, line)
+	case "band", "spectrum":
+		return s, syntax.Fail(line.Where, line.Label+" belongs to chains whose elements are spectra, which this version does not read", "state each element by its factor in the band")
+	}
+	return c.elementStep(s, line)
+}
+
+func (c *Checker) elementStep(s Step, line syntax.BlockLine) (Step, error) {
+	if len(line.Items) != 1 {
+		return s, syntax.Fail(line.Where, s.Label+" has "+named(len(line.Items), "value")+"; an element has one factor", "write "+s.Label+": 65 %")
+	}
+	x := line.Items[0]
+	var err error
+	if s.Factor, err = c.plain(x); err != nil {
+		return s, err
+	}
+	if t := s.Factor.Type; t.Kind != Number || !t.Dim.IsNumber() {
+		return s, syntax.Fail(x.Span(), s.Label+" is a factor between 0 and 1, not "+c.describe(t), "write "+s.Label+": 65 %")
+	}
+	if v, ok := s.Factor.Constant(); ok && !(v >= 0 && v <= 1) {
+		return s, syntax.Fail(x.Span(), fmt.Sprintf("%s is %s; a factor lies between 0 and 1", s.Label, units.FormatNumber(v, 5)), "percent is written 65 %")
+	}
+	if line.Times != nil {
+		if s.Crossings, err = c.crossings(line); err != nil {
+			return s, err
+		}
+	}
+	s.All = passing(s)
+	return s, nil
+}
+
+func (c *Checker) crossings(line syntax.BlockLine) (*Node, error) {
+	n, err := c.plain(line.Times)
+	if err != nil {
+		return nil, err
+	}
+	v, fixed := n.Constant()
+	if !n.Type.Pure() || fixed && (v < 1 || v > 1000 || v != float64(int(v))) {
+		return nil, syntax.Fail(line.Times.Span(), "light crosses an element a whole number of times from 1 to 1000", "write x6, or x(name) for a name that holds such a number")
+	}
+	return n, nil
+}
+
+// passing makes the node of factor^crossings that refuses what is no factor.
+func passing(s Step) *Node {
+	args := []*Node{s.Factor}
+	if s.Crossings != nil {
+		args = append(args, s.Crossings)
+	}
+	label := s.Label
+	f := &Function{Name: label, Call: func(x []float64) (float64, []string, error) {
+		if !(x[0] >= 0 && x[0] <= 1) {
+			return 0, nil, fmt.Errorf("%s is %s; the factor of an element lies between 0 and 1", label, units.FormatNumber(x[0], 5))
+		}
+		if len(x) == 1 {
+			return x[0], nil, nil
+		}
+		if n := x[1]; n < 1 || n > 1000 || n != float64(int(n)) {
+			return 0, nil, fmt.Errorf("light crosses %s %s times; that is a whole number from 1 to 1000", label, units.FormatNumber(n, 5))
+		}
+		return powInt(x[0], int(x[1])), nil, nil
+	}}
+	return &Node{op: opCall, fn: f, args: args, At: s.Factor.At, Owner: s.Factor.Owner}
+}
+
+func (c *Checker) reduction(s Step, line syntax.BlockLine) (Step, error) {
+	if len(line.Items) != 2 || line.Times != nil {
+		return s, syntax.Fail(line.Where, "a reduction has two numbers: across the scan, then along it", "write reduction: 4, 4")
+	}
+	for i, to := range []**Node{&s.X, &s.Y} {
+		n, err := c.plain(line.Items[i])
+		if err != nil {
+			return s, err
+		}
+		if v, ok := n.Constant(); !n.Type.Pure() || ok && !(v > 0) {
+			return s, syntax.Fail(line.Items[i].Span(), "a reduction is a number greater than 0", "write reduction: 4, 4")
+		}
+		*to = n
+	}
+	return s, nil
+}
+
+// factorPlanes allows a factor that is a ratio of the planes around it.
+func (c *Checker) factorPlanes(ch *Chain, b *syntax.Block) error {
+	for i, s := range ch.Steps {
+		if s.Factor == nil || s.Factor.Type.Plane == "" {
+			continue
+		}
+		before, after := ch.around(i)
+		if want := after.times(before, -1); s.Factor.Type.Plane != want || s.Crossings != nil {
+			return syntax.Fail(s.Factor.At, fmt.Sprintf("%s is a ratio at %s, and it stands between %s and %s", s.Label, s.Factor.Type.Plane, before, after),
+				"number_of(x) drops a plane on purpose")
+		}
+	}
+	return nil
+}
+
+func (ch *Chain) around(i int) (before, after Plane) {
+	for k, s := range ch.Steps {
+		if s.Plane != "" && k < i {
+			before = s.Plane
+		}
+		if s.Plane != "" && k > i && after == "" {
+			after = s.Plane
+		}
+	}
+	return before, after
+}
+
+// part returns the steps between two planes and whether they run against the
+// light.
+func (ch *Chain) part(from, to Plane) (steps []Step, against bool, err error) {
+	i := slices.IndexFunc(ch.Steps, func(s Step) bool { return s.Plane == from && from != "" })
+	j := slices.IndexFunc(ch.Steps, func(s Step) bool { return s.Plane == to && to != "" })
+	for _, p := range []struct {
+		at   int
+		name Plane
+	}{{i, from}, {j, to}} {
+		if p.at < 0 {
+			return nil, false, fmt.Errorf("%s has no plane %s; it has %s", ch.Name, p.name, joined(ch.planes()))
+		}
+	}
+	if i > j {
+		return ch.Steps[j:i], true, nil
+	}
+	return ch.Steps[i:j], false, nil
+}
+
+func joined(planes []Plane) string {
+	var s []string
+	for _, p := range planes {
+		s = append(s, string(p))
+	}
+	return strings.Join(s, ", ")
+}

@@ -1,0 +1,98 @@
+package program
+
+import (
+	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
+)
+
+// Node is one checked piece of a formula. Nodes are never changed once made,
+// and they share: a node may have several parents.
+type Node struct {
+	Type  Type
+	At    syntax.Span // in the text of the owner's statement
+	Owner string      // the name whose formula this is; "" for the statement at hand
+	op    op
+	args  []*Node
+	value float64   // of a constant; exponent of a power
+	name  string    // of a reference
+	text  string    // of a text
+	fn    *Function // of a call
+	cmp   string    // of a comparison
+	chain *Chain
+}
+
+type op int
+
+const (
+	opConst op = iota
+	opRef
+	opNeg
+	opAdd
+	opSub
+	opMul
+	opDiv
+	opPower // constant exponent in value
+	opPow   // both operands are numbers
+	opCompare
+	opIf
+	opCall
+	opList
+	opText
+	opChain
+	opInput // a place that whoever runs the program fills
+)
+
+// Text returns the text of a text.
+func (n *Node) Text() string { return n.text }
+
+// Chain returns the chain of a chain.
+func (n *Node) Chain() *Chain { return n.chain }
+
+// Constant returns the value of a constant.
+func (n *Node) Constant() (float64, bool) { return n.value, n.op == opConst }
+
+// Names calls yield for every name that the formula rests on directly, in the
+// order of the text, again for every time it stands there.
+func (n *Node) Names(yield func(name string)) { n.names(map[*Node]bool{}, yield) }
+
+func (n *Node) names(seen map[*Node]bool, yield func(string)) {
+	if seen[n] {
+		return
+	}
+	seen[n] = true
+	if n.op == opRef {
+		yield(n.name)
+	}
+	for _, a := range n.args {
+		a.names(seen, yield)
+	}
+	if n.chain != nil {
+		for _, s := range n.chain.Steps {
+			for _, a := range s.nodes() {
+				a.names(seen, yield)
+			}
+		}
+	}
+}
+
+// constant makes a number that needs no text.
+func constant(v float64, t Type, at syntax.Span, owner string) *Node {
+	return &Node{op: opConst, value: v, Type: t, At: at, Owner: owner}
+}
+
+// NewConstant makes the node of a named constant.
+func NewConstant(v units.Quantity) *Node {
+	return constant(v.SI(), Type{Dim: v.Dimension()}, syntax.Span{}, "")
+}
+
+// Items returns the nodes of a list's items.
+func Items(n *Node, resolve Resolve) []*Node {
+	for n.op == opRef {
+		to, err := resolve(n.name)
+		if err != nil {
+			return nil
+		}
+		n = to
+	}
+	return n.args
+}

@@ -1,0 +1,75 @@
+package program
+
+import (
+	"example.com/dosewright/units"
+)
+
+// Kind is what sort of thing a value is.
+type Kind int
+
+// The kinds of values. The zero value is a number.
+const (
+	Number Kind = iota
+	Point       // a temperature point
+	List        // numbers of one dimension
+	Text
+	ChainKind
+	condition // inside if only
+)
+
+// Type is all that checking knows of a value.
+type Type struct {
+	Kind  Kind
+	Dim   units.Dimension
+	Plane Plane
+}
+
+// Pure says whether the value is a plain number without a plane.
+func (t Type) Pure() bool { return t.Kind == Number && t.Dim.IsNumber() && t.Plane == "" }
+
+// describe names a type for a message: "fluence (mJ/cm²) at WAFER".
+func (c *Checker) describe(t Type) string {
+	switch t.Kind {
+	case Text:
+		return "a text"
+	case ChainKind:
+		return "a chain"
+	case List:
+		return "a list of " + c.describe(Type{Dim: t.Dim})
+	case Point:
+		return "a temperature point"
+	}
+	s := c.quantity(t.Dim)
+	if t.Plane != "" {
+		s += " at " + string(t.Plane)
+	}
+	return s
+}
+
+// quantity names a dimension: "fluence (mJ/cm²)".
+func (c *Checker) quantity(d units.Dimension) string {
+	name, unit := c.Scope.Units().Name(d), c.Scope.Units().UnitText(d)
+	switch {
+	case d.IsNumber():
+		return "a pure number"
+	case name == "":
+		return "a quantity in " + unit
+	}
+	return name + " (" + unit + ")"
+}
+
+// Root returns the type of the n-th root.
+func (t Type) Root(n int) (Type, error) {
+	if t.Kind != Number {
+		return t, units.ErrRoot
+	}
+	d, err := t.Dim.Pow(1, n)
+	if err != nil {
+		return t, err
+	}
+	p, ok := t.Plane.power(1, n)
+	if !ok {
+		return t, units.ErrRoot
+	}
+	return Type{Dim: d, Plane: p}, nil
+}

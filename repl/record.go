@@ -1,0 +1,105 @@
+package repl
+
+import "encoding/json"
+
+// Record is a result as plain values, for JSON. Which fields it writes depends
+// on what it is; numbers are in full, and Text alone is rounded.
+type Record struct {
+	Kind        RecordKind
+	Line        int
+	Text        string
+	Value       json.Number  // in Unit
+	Unit        string       // "" for a pure number
+	SI          float64      // in SI base units
+	Dimension   string       // in SI base units and counted things
+	Plane       string       // "" for none
+	Uncertainty *json.Number // in Unit, nil for none
+	Holds       bool
+	Columns     []Column
+	Rows        [][]Cell
+	Warnings    []string
+	Error       string
+	Column      int
+}
+
+// RecordKind says what a record is.
+type RecordKind int
+
+// The kinds of records.
+const (
+	TextRecord RecordKind = iota
+	ValueRecord
+	CheckRecord
+	TableRecord
+	ErrorRecord
+)
+
+// Column is the head of a column: a name, and the unit of its numbers, "" for
+// pure numbers and texts.
+type Column struct {
+	Name string `json:"name"`
+	Unit string `json:"unit"`
+}
+
+// Cell is a number in its column's unit, or a text.
+type Cell struct {
+	Number float64
+	Text   string
+	IsText bool
+}
+
+// MarshalJSON writes the number or the text.
+func (c Cell) MarshalJSON() ([]byte, error) {
+	if c.IsText {
+		return json.Marshal(c.Text)
+	}
+	return json.Marshal(c.Number)
+}
+
+// MarshalJSON writes the fields that belong to the record's kind.
+func (r Record) MarshalJSON() ([]byte, error) {
+	warnings := r.Warnings
+	if warnings == nil {
+		warnings = []string{}
+	}
+	switch r.Kind {
+	case ValueRecord:
+		return json.Marshal(struct {
+			Line        int          `json:"line"`
+			Text        string       `json:"text"`
+			Value       json.Number  `json:"value"`
+			Unit        string       `json:"unit"`
+			SI          float64      `json:"si"`
+			Dimension   string       `json:"dimension"`
+			Plane       string       `json:"plane"`
+			Uncertainty *json.Number `json:"uncertainty"`
+			Warnings    []string     `json:"warnings"`
+		}{r.Line, r.Text, r.Value, r.Unit, r.SI, r.Dimension, r.Plane, r.Uncertainty, warnings})
+	case CheckRecord:
+		return json.Marshal(struct {
+			Line     int      `json:"line"`
+			Text     string   `json:"text"`
+			Holds    bool     `json:"holds"`
+			Warnings []string `json:"warnings"`
+		}{r.Line, r.Text, r.Holds, warnings})
+	case TableRecord:
+		return json.Marshal(struct {
+			Line     int      `json:"line"`
+			Text     string   `json:"text"`
+			Columns  []Column `json:"columns"`
+			Rows     [][]Cell `json:"rows"`
+			Warnings []string `json:"warnings"`
+		}{r.Line, r.Text, r.Columns, r.Rows, warnings})
+	case ErrorRecord:
+		return json.Marshal(struct {
+			Line   int    `json:"line"`
+			Error  string `json:"error"`
+			Column int    `json:"column"`
+		}{r.Line, r.Error, r.Column})
+	}
+	return json.Marshal(struct {
+		Line     int      `json:"line"`
+		Text     string   `json:"text"`
+		Warnings []string `json:"warnings"`
+	}{r.Line, r.Text, warnings})
+}

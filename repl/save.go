@@ -1,0 +1,56 @@
+package repl
+
+import (
+	"fmt"
+	"strings"
+
+	"example.com/dosewright/repl/internal/syntax"
+)
+
+// Transcript returns what was said so far with the replies, as the text of a
+// session file. What only handled files, and quit, is left out.
+func (s *Session) Transcript() []byte {
+	var b strings.Builder
+	for _, e := range s.entries {
+		if passing(e.text) {
+			continue
+		}
+		b.WriteString(e.text + "\n")
+		writeReply(&b, e.reply)
+	}
+	return []byte(b.String())
+}
+
+// passing says whether a statement belongs to the moment and not to what a
+// session holds.
+func passing(text string) bool {
+	word, _, _ := strings.Cut(text, " ")
+	return word == "save" || word == "replay" || word == "quit"
+}
+
+func writeReply(b *strings.Builder, r *Reply) {
+	for _, l := range r.Lines() {
+		b.WriteString(strings.TrimRight(Margin+l.Text, " ") + "\n")
+	}
+}
+
+func (s *Session) save(j job) ([]Result, error) {
+	c := j.do.(*syntax.Command)
+	if s.config.Save == nil {
+		return nil, &syntax.Error{Marks: []syntax.Span{c.TextAt}, Msg: "this session writes no files", Hint: "copy the transcript instead", Cause: ErrFile}
+	}
+	full, err := s.inside(c.Text)
+	if err == nil {
+		err = s.config.Save(full, s.Transcript())
+	}
+	if err != nil {
+		return nil, &syntax.Error{Marks: []syntax.Span{c.TextAt}, Msg: err.Error(), Hint: "nothing was written; choose another name or place", Cause: err}
+	}
+	n := 0
+	for _, e := range s.entries {
+		if !passing(e.text) {
+			n++
+		}
+	}
+	return []Result{&Text{content: []string{fmt.Sprintf("%d statements and notes are in %s", n, c.Text)}}}, nil
+}

@@ -1,0 +1,8 @@
+//go:build darwin || dragonfly || freebsd || netbsd || openbsd
+
+package terminal
+
+import "golang.org/x/sys/unix"
+
+// The requests that read and set the mode of a terminal.
+const getMode, setMode = unix.TIOCGETA, unix.TIOCSETA

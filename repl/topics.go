@@ -1,0 +1,117 @@
+package repl
+
+import (
+	"fmt"
+	"strconv"
+	"strings"
+
+	"example.com/dosewright/units"
+)
+
+// topic is a page of help that belongs to no single word.
+type topic struct{ name, summary, text string }
+
+// topics are the pages in the order in which the overview lists them.
+func topics() []topic {
+	return []topic{
+		{"language", "expressions, names, lists, notes", languagePage},
+		{"units", "how units are written, and which are known", unitsPage + knownUnits()},
+		{"planes", "where a quantity stands, and how it is carried", planesPage},
+		{"counting", "wafers, fields, pulses: counted things are dimensions", countingPage},
+		{"temperatures", "points and differences", temperaturesPage},
+		{"files", "session files, import, save, replay", filesPage},
+		{"keys", "the keys at the prompt", keysPage},
+		{"cautions", "what these numbers are not for", cautionsPage},
+	}
+}
+
+const languagePage = `
++ - * / ^ and parentheses; ^ binds tightest and to the right, -3^2 is -9.
+if(a < b, x, y) chooses. A product needs its sign: 2 * d; 2 d is two days.
+name = formula  # note          a live definition: what rests on it follows
+f(a, b) = formula               a function of the session
+{1 nm, 2 nm}                    a list; sum mean sd rss median quantile take it
+photon_count(dose, area = 400 nm^2)   arguments by position, then by name
+x [mJ]                          states the answer in that unit
+Constants: pi planck_constant speed_of_light elementary_charge boltzmann_constant
+avogadro_constant classical_electron_radius (CODATA 2022).
+`
+
+const unitsPage = `
+A unit stands right behind its number and is one word: 30 mJ/cm^2, 5 /µm, 2 W/(m*K).
+Powers: ^2, ^-1, ^(1/2), 2, ², ⁻¹. Products: * or ·. With blanks / and * are arithmetic.
+A bracket states the unit of an answer and never gives one: dose * area [mJ].
+Upper and lower case differ. µ, μ and u are micro. W/m*K is refused: write W/(m*K).
+70 % is 0.7, 40 ppm is 40e-6, exactly as written.
+`
+
+// knownUnits lists the symbols that the standard system reads.
+func knownUnits() string {
+	var line, all strings.Builder
+	for _, w := range units.Standard().Words() {
+		if line.Len()+len(w) > 78 {
+			all.WriteString(line.String() + "\n")
+			line.Reset()
+		}
+		line.WriteString(w + " ")
+	}
+	return "Known, with SI prefixes where the SI takes them:\n" + all.String() + line.String()
+}
+
+const planesPage = `
+A power, energy, photon number or rate, irradiance or fluence may stand at a plane:
+  SOURCE   in-band, into the half space        IF      behind collector, gas and filter
+  MASK     on the mask, before it reflects     WAFER   on top of the resist
+250 W at IF does not add to 2 W at WAFER. A ratio of planes takes one to the other:
+  250 W at IF * 0.9 % at WAFER/IF   is at WAFER
+  carry(250 W at IF, line3, WAFER)  does the same through a chain; see: help chain
+A quantity without a plane fits beside one with; a chain's lines "at NAME" add planes.
+`
+
+const countingPage = `
+wafer, field, die and pulse are dimensions: 96 field/wafer, 150 wafer/h, 50 kpulse/s.
+150 wafer/h does not add to 96 field/h, and 5 mJ/pulse * 50 kHz is no power.
+counted lot   declares another. number_of(x) drops counted things and planes on purpose.
+photon, electron, mirror and bilayer are names for the number one.
+`
+
+const temperaturesPage = `
+22 degC is a point on the scale, 295 K a point or a difference.
+point - point is a difference, point + point is refused; beside a point K is a difference.
+*, / and ^ count a point as its kelvin value, with a note.
+`
+
+const filesPage = `
+A session file (*.budget) is text: statements, # notes, and replies behind "| ".
+Text copied from the prompt is a session file as it stands.
+  import "conventions.budget"   brings in definitions; the reply records what came in
+  save "today.budget"           writes what was said, whole or not at all
+  replay "today.budget"         runs it again and compares every recorded reply
+Paths are relative to the file and stay below the session's folder. On the command
+line, replay FILE does the same, and replay --update FILE rewrites the replies.
+`
+
+const keysPage = `
+Tab completes names, functions, arguments and units; inside a call it first shows the
+arguments. Up and Down recall lines, Ctrl-R searches them. Ctrl-C drops the line or the
+open block, or stops a computation. Ctrl-D on an empty line leaves, as quit does.
+`
+
+const cautionsPage = `
+Planning arithmetic only: nothing here sets an exposure limit, interlock or clearance.
+Where laser power, hydrogen, vacuum, heat loads or electrical power are touched, the
+site's rules, the applicable codes (IEC 60825-1, the local hydrogen code and others)
+and licensed practice govern.
+`
+
+// unitHelp says what a unit is.
+func (s *Session) unitHelp(word string, u units.Unit) string {
+	name := s.sys.Name(u.Dimension())
+	if name == "" {
+		name = "no common name"
+	}
+	if u.Point() {
+		return fmt.Sprintf("%s is a unit of temperature: %s = t/%s + 273.15 as T/K", word, u, u)
+	}
+	return fmt.Sprintf("%s is a unit (%s): 1 %s = %s %s in base units", word, name, u, strconv.FormatFloat(u.SI(1), 'g', 12, 64), s.sys.BaseText(u.Dimension()))
+}

@@ -1,0 +1,137 @@
+package repl
+
+import (
+	"fmt"
+	"strings"
+	"text/tabwriter"
+
+	"example.com/dosewright/repl/internal/program"
+	"example.com/dosewright/repl/internal/syntax"
+)
+
+// whyLines is how long a tree may grow before the rest is counted only.
+const whyLines = 60
+
+func (s *Session) why(j job) ([]Result, error) {
+	name := j.do.(*syntax.Command).Names[0]
+	if k, ok := constants()[name.Name]; ok {
+		return []Result{&Text{content: []string{name.Name + " = " + k.text(s) + "  # " + k.doc}}}, nil
+	}
+	if s.store.defs[name.Name] == nil {
+		e := syntax.Fail(name.Where, name.Name+" is not defined", "names lists what is")
+		if near := s.near(name.Name); len(near) > 0 {
+			e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
+		}
+		return nil, e
+	}
+	t := &tree{session: s, seen: map[string]bool{}}
+	t.grow(name.Name, 0)
+	return []Result{&Text{content: t.text()}}, nil
+}
+
+// tree collects the lines of a derivation.
+type tree struct {
+	session *Session
+	seen    map[string]bool
+	rows    []string
+	folded  map[string]bool
+}
+
+func (t *tree) grow(name string, depth int) {
+	d := t.session.store.defs[name]
+	if d == nil {
+		return
+	}
+	indent := strings.Repeat("  ", min(depth, 20))
+	if t.seen[name] {
+		t.add(indent + name + "\t\t(above)")
+		return
+	}
+	if len(t.rows) >= whyLines {
+		if t.folded == nil {
+			t.folded = map[string]bool{}
+		}
+		for a := range t.session.store.ancestors([]string{name}) {
+			if !t.seen[a] {
+				t.folded[a] = true
+			}
+		}
+		return
+	}
+	t.seen[name] = true
+	t.add(indent + t.session.formula(d) + "\t" + t.session.worth(d) + "\t" + remarks(d))
+	for _, u := range d.uses {
+		t.grow(u, depth+1)
+	}
+}
+
+func (t *tree) add(row string) { t.rows = append(t.rows, row) }
+
+// text lines the parts up.
+func (t *tree) text() []string {
+	var b strings.Builder
+	w := tabwriter.NewWriter(&b, 0, 0, 3, ' ', 0)
+	for _, r := range t.rows {
+		fmt.Fprintln(w, r)
+	}
+	w.Flush()
+	var out []string
+	for _, l := range strings.Split(strings.TrimRight(b.String(), "\n"), "\n") {
+		out = append(out, strings.TrimRight(l, " "))
+	}
+	if n := len(t.folded); n > 0 {
+		out = append(out, fmt.Sprintf("… and %d more names below these; why on one of them goes on", n))
+	}
+	return out
+}
+
+// formula is a definition as one line of text, without its note.
+func (s *Session) formula(d *definition) string {
+	if b, ok := d.action.(*syntax.Block); ok {
+		var parts []string
+		for _, l := range b.Lines {
+			content, _, _ := strings.Cut(l.Text, "#")
+			parts = append(parts, strings.TrimSpace(content))
+		}
+		return b.Kind + " " + d.name + ": " + strings.Join(parts, "; ")
+	}
+	return statementWithoutNote(d.text)
+}
+
+// statementWithoutNote cuts a note off, but not a # inside a text.
+func statementWithoutNote(text string) string {
+	quoted := false
+	for i, r := range text {
+		switch {
+		case r == '"':
+			quoted = !quoted
+		case r == '#' && !quoted:
+			return strings.TrimSpace(text[:i])
+		}
+	}
+	return strings.TrimSpace(text)
+}
+
+// worth is the value of a definition as text, "" for chains, functions and
+// bare literals, whose text says it.
+func (s *Session) worth(d *definition) string {
+	if d.node == nil || d.bare || d.node.Type.Kind != program.Number && d.node.Type.Kind != program.Point {
+		return ""
+	}
+	v, err := s.valueOf(d)
+	if err != nil {
+		return "has no value: " + err.Error()
+	}
+	return "= " + s.value(v, d.node.Type, d.unit, nil).Text(s.digits)
+}
+
+func remarks(d *definition) string {
+	var parts []string
+	if d.note != "" {
+		parts = append(parts, "# "+d.note)
+	}
+	if d.file != "" {
+		parts = append(parts, fmt.Sprintf("(%s:%d)", d.file, d.line))
+	}
+	return strings.Join(parts, "  ")
+}
