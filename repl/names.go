@@ -56,7 +56,11 @@ func (s *Session) short(d *definition) string {
 	return s.value(v, d.node.Type, d.unit, nil).Text(s.digits)
 }
 
-// aligned lines the columns of texts up.
+// widest is how wide a text may be and still push its column.
+const widest = 48
+
+// aligned lines the columns of texts up. A text that is wider than its column
+// moves what stands behind it in its own row only.
 func aligned(rows [][]string) []string {
 	var widths []int
 	for _, r := range rows {
@@ -64,7 +68,7 @@ func aligned(rows [][]string) []string {
 			if i == len(widths) {
 				widths = append(widths, 0)
 			}
-			widths[i] = min(max(widths[i], columns(c)), 60)
+			widths[i] = max(widths[i], min(columns(c), widest))
 		}
 	}
 	var out []string

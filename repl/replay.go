@@ -249,28 +249,42 @@ func (r *Replayed) Lines() []Line {
 func (d Drift) lines(file string) []Line {
 	statement, _, _ := strings.Cut(d.Statement, "\n")
 	out := []Line{{fmt.Sprintf("%s:%d  %s", file, d.Line, statement), Plain}}
-	for _, pair := range []struct {
-		head string
-		tone Tone
-		rows []string
-	}{{"  recorded  ", Plain, d.Was}, {"  now       ", Bad, d.Now}} {
-		rows := pair.rows
-		if len(rows) > 12 {
-			rows = append(slices.Clone(rows[:11]), fmt.Sprintf("… and %d more lines", len(pair.rows)-11))
-		}
-		if len(rows) == 0 {
-			rows = []string{"no reply"}
-		}
-		for i, l := range rows {
-			head := pair.head
-			if i > 0 {
-				head = "            "
-			}
-			out = append(out, Line{head + l, pair.tone})
-		}
-	}
+	was, now := differing(d.Was, d.Now)
+	out = append(out, under("  recorded  ", Plain, was)...)
+	out = append(out, under("  now       ", Bad, now)...)
 	for _, c := range d.MovedBy {
 		out = append(out, Line{"  moved by  " + c.text(), WayOn})
+	}
+	return out
+}
+
+// differing leaves of two replies the lines that differ, when they are as
+// many.
+func differing(was, now []string) (a, b []string) {
+	if len(was) != len(now) {
+		return was, now
+	}
+	for i := range was {
+		if spaced(was[i]) != spaced(now[i]) {
+			a, b = append(a, was[i]), append(b, now[i])
+		}
+	}
+	return a, b
+}
+
+// under prints the first lines of a reply behind a head.
+func under(head string, tone Tone, rows []string) []Line {
+	const most = 12
+	if len(rows) == 0 {
+		return []Line{{head + "no reply", tone}}
+	}
+	var out []Line
+	for i, l := range rows {
+		if i == most-1 && len(rows) > most {
+			return append(out, Line{fmt.Sprintf("%s… and %d more lines", head, len(rows)-i), tone})
+		}
+		out = append(out, Line{head + l, tone})
+		head = strings.Repeat(" ", columns(head))
 	}
 	return out
 }
@@ -282,7 +296,11 @@ func (c Change) text() string {
 	case c.Now == "":
 		return c.Was + "  (gone)"
 	}
-	return c.Now + "  (was " + c.Was + ")"
+	was := c.Was
+	if head, _, ok := strings.Cut(c.Now, "= "); ok {
+		was = strings.TrimPrefix(was, head+"= ")
+	}
+	return c.Now + "  (was " + was + ")"
 }
 
 func (s *Session) replayFile(j job) ([]Result, error) {

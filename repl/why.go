@@ -3,7 +3,6 @@ package repl
 import (
 	"fmt"
 	"strings"
-	"text/tabwriter"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
@@ -33,7 +32,7 @@ func (s *Session) why(j job) ([]Result, error) {
 type tree struct {
 	session *Session
 	seen    map[string]bool
-	rows    []string
+	rows    [][]string
 	folded  map[string]bool
 }
 
@@ -44,7 +43,7 @@ func (t *tree) grow(name string, depth int) {
 	}
 	indent := strings.Repeat("  ", min(depth, 20))
 	if t.seen[name] {
-		t.add(indent + name + "\t\t(above)")
+		t.add(indent+name, "", "(above)")
 		return
 	}
 	if len(t.rows) >= whyLines {
@@ -59,26 +58,27 @@ func (t *tree) grow(name string, depth int) {
 		return
 	}
 	t.seen[name] = true
-	t.add(indent + t.session.formula(d) + "\t" + t.session.worth(d) + "\t" + remarks(d))
+	t.add(indent+shortened(t.session.formula(d)), t.session.worth(d), remarks(d))
 	for _, u := range d.uses {
 		t.grow(u, depth+1)
 	}
 }
 
-func (t *tree) add(row string) { t.rows = append(t.rows, row) }
+func (t *tree) add(cells ...string) { t.rows = append(t.rows, cells) }
+
+// shortened keeps a formula from pushing the value off the screen; walk shows
+// a chain in full.
+func shortened(formula string) string {
+	const most = 76
+	if columns(formula) <= most {
+		return formula
+	}
+	return string([]rune(formula)[:most-2]) + " …"
+}
 
 // text lines the parts up.
 func (t *tree) text() []string {
-	var b strings.Builder
-	w := tabwriter.NewWriter(&b, 0, 0, 3, ' ', 0)
-	for _, r := range t.rows {
-		fmt.Fprintln(w, r)
-	}
-	w.Flush()
-	var out []string
-	for _, l := range strings.Split(strings.TrimRight(b.String(), "\n"), "\n") {
-		out = append(out, strings.TrimRight(l, " "))
-	}
+	out := aligned(t.rows)
 	if n := len(t.folded); n > 0 {
 		out = append(out, fmt.Sprintf("… and %d more names below these; why on one of them goes on", n))
 	}

@@ -40,14 +40,21 @@ const (
 
 const (
 	sixths   = 6 // the fixed denominator of exponents
+	maxSixth = 21 * sixths
 	lanes    = 8 // signed bytes in a word
 	lastBase = Base(3*lanes - 1)
 	// MaxDeclared is how many counted things a System may declare.
 	MaxDeclared = int(lastBase-firstDeclared) + 1
 )
 
-// Of gives the dimension that is the base to the first power.
-func (b Base) Of() Dimension { return Dimension{}.with(b, sixths) }
+// Of gives the dimension that is the base to the first power; beyond the last
+// base it is that of a number.
+func (b Base) Of() Dimension {
+	if b > lastBase {
+		return Dimension{}
+	}
+	return Dimension{}.with(b, sixths)
+}
 
 // Counted says whether the base is a counted thing and not one of the SI.
 func (b Base) Counted() bool { return b >= Wafer }
@@ -69,6 +76,9 @@ func (d Dimension) sixth(b Base) int8 {
 
 // Exponent returns the exponent of a base as a fraction in lowest terms.
 func (d Dimension) Exponent(b Base) (num, den int) {
+	if b > lastBase {
+		return 0, 1
+	}
 	return reduce(int(d.sixth(b)), sixths)
 }
 
@@ -90,8 +100,8 @@ func addBytes(a, b uint64) (sum, over uint64) {
 	return sum, (a ^ sum) & (b ^ sum) & high
 }
 
-// negBytes negates eight signed bytes; a lane of −128 never occurs (with
-// bounds it).
+// negBytes negates eight signed bytes; a lane of −128 never occurs, since
+// exponents end at ±126.
 func negBytes(a uint64) uint64 {
 	sum, _ := addBytes(^a, 0x0101010101010101)
 	return sum
@@ -100,19 +110,38 @@ func negBytes(a uint64) uint64 {
 // Mul returns the dimension of a product. It fails when an exponent leaves
 // the range −21 to +21.
 func (d Dimension) Mul(e Dimension) (Dimension, error) {
-	si, over := addBytes(d.si, e.si)
+	si, large := addLanes(d.si, e.si)
 	if d.things|e.things|d.declared|e.declared == 0 {
-		if over != 0 {
-			return Dimension{}, ErrExponent
+		if large != 0 {
+			return d.mulSlowly(e)
 		}
 		return Dimension{si: si}, nil
 	}
-	things, over2 := addBytes(d.things, e.things)
-	declared, over3 := addBytes(d.declared, e.declared)
-	if over|over2|over3 != 0 {
-		return Dimension{}, ErrExponent
+	things, large2 := addLanes(d.things, e.things)
+	declared, large3 := addLanes(d.declared, e.declared)
+	if large|large2|large3 != 0 {
+		return d.mulSlowly(e)
 	}
 	return Dimension{si, things, declared}, nil
+}
+
+// addLanes is addBytes; large is not zero when a sum overflowed or left −64 to
+// 63, so that the range must be looked at closely.
+func addLanes(a, b uint64) (sum, large uint64) {
+	sum, over := addBytes(a, b)
+	return sum, over | (sum^sum<<1)&high
+}
+
+// mulSlowly is Mul lane by lane, with the exact check of the range.
+func (d Dimension) mulSlowly(e Dimension) (Dimension, error) {
+	for b := Base(0); b <= lastBase; b++ {
+		n := int(d.sixth(b)) + int(e.sixth(b))
+		if n > maxSixth || n < -maxSixth {
+			return Dimension{}, ErrExponent
+		}
+		d = d.with(b, int8(n))
+	}
+	return d, nil
 }
 
 // Div returns the dimension of a quotient, with the error of Mul.
@@ -141,7 +170,7 @@ func (d Dimension) Pow(num, den int) (Dimension, error) {
 			return Dimension{}, ErrRoot
 		}
 		n = n * num / den
-		if n > 126 || n < -126 {
+		if n > maxSixth || n < -maxSixth {
 			return Dimension{}, ErrExponent
 		}
 		p = p.with(b, int8(n))

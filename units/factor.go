@@ -35,7 +35,7 @@ func (f factor) times(g factor) factor {
 	m, n := max(f.root, 1), max(g.root, 1)
 	if m != n {
 		_, both := reduce(m, n)
-		m, n, f, g = m*both, n, f.raised(both), g.raised(m*both/n)
+		m, f, g = m*both, f.raised(both), g.raised(m*both/n)
 	}
 	f.num, f.den = product(f.num, g.num), product(f.den, g.den)
 	f.ten += g.ten

@@ -43,10 +43,10 @@ voltage             ~V
 resistance          ~Ω
 capacitance         ~F
 magnetic·flux·density ~T
-1/time              s⁻¹
+rate                s⁻¹
 1/length            m⁻¹ µm⁻¹:0.001 nm⁻¹:10
-1/area              m⁻² cm⁻²:0.001 µm⁻²:0.001 nm⁻²:0.001
-1/volume            m⁻³ cm⁻³:0.001 µm⁻³:0.001 nm⁻³:0.001
+areal·density       m⁻² cm⁻²:0.001 µm⁻²:0.001 nm⁻²:0.001
+number·density      m⁻³ cm⁻³:0.001 µm⁻³:0.001 nm⁻³:0.001
 temperature         mK K:0.1
 1/temperature       ppm/K
 amount·of·substance ~mol

@@ -38,14 +38,14 @@ func (s *System) Parse(text string) (Unit, error) {
 	if len(text) > maxUnit {
 		return Unit{}, p.fail(0, len(text), fmt.Sprintf("a unit has at most %d bytes", maxUnit), nameIt)
 	}
-	if p.peek() == 0 {
+	if p.peek() == end {
 		return Unit{}, p.fail(0, len(text), "here a unit is missing", "write a unit such as nm, or 1 for a pure number")
 	}
 	parts, err := p.unit()
 	switch {
 	case err != nil:
 		return Unit{}, err
-	case p.peek() != 0:
+	case p.peek() != end:
 		return Unit{}, p.stray()
 	}
 	return p.complete(parts)
@@ -87,8 +87,10 @@ func (p *reader) fail(start, end int, msg, hint string) *ParseError {
 	return &ParseError{Text: p.text, Start: start, End: end, Msg: msg, Hint: hint}
 }
 
-// peek passes over marks that are not seen and gives the rune behind them, 0
-// at the end.
+const end rune = -1
+
+// peek passes over marks that are not seen and gives the rune behind them, or
+// end.
 func (p *reader) peek() rune {
 	for p.pos < len(p.text) {
 		r, n := utf8.DecodeRuneInString(p.text[p.pos:])
@@ -97,7 +99,7 @@ func (p *reader) peek() rune {
 		}
 		p.pos += n
 	}
-	return 0
+	return end
 }
 
 // next passes over the rune that peek gave.
@@ -116,7 +118,7 @@ func (p *reader) unit() ([]part, error) {
 	switch r {
 	case '1':
 		p.next()
-		if r := p.peek(); r != 0 && r != '/' {
+		if r := p.peek(); r != end && r != '/' {
 			return nil, p.numberInside(start)
 		}
 	case '/':
@@ -175,7 +177,7 @@ func (p *reader) factor() ([]part, error) {
 			return nil, err
 		}
 		parts = []part{one}
-	case r == 0:
+	case r == end:
 		return nil, p.fail(max(0, start-1), start, "the unit breaks off here", "write the symbol that follows")
 	default:
 		return nil, p.stray()

@@ -108,7 +108,7 @@ func (p *reader) fraction(start int) (num, den int, err error) {
 
 // lowered gives the plain sign of a raised digit or minus, or 0.
 func lowered(r rune) byte {
-	if i := strings.IndexRune("⁰¹²³⁴⁵⁶⁷⁸⁹⁻", r); i >= 0 && r != 0 {
+	if i := strings.IndexRune("⁰¹²³⁴⁵⁶⁷⁸⁹⁻", r); i >= 0 {
 		return "0123456789-"[utf8.RuneCountInString("⁰¹²³⁴⁵⁶⁷⁸⁹⁻"[:i])]
 	}
 	return 0

@@ -9,10 +9,10 @@ import (
 
 // isSymbol says whether a rune belongs to the symbol of a unit.
 func isSymbol(r rune) bool {
-	return unicode.IsLetter(r) && !unicode.Is(unicode.Lm, r) || strings.ContainsRune("°%′″'℃℉_‰", r) && r != 0
+	return unicode.IsLetter(r) && !unicode.Is(unicode.Lm, r) || strings.ContainsRune("°%′″'℃℉_‰", r)
 }
 
-func isProduct(r rune) bool { return r != 0 && strings.ContainsRune("*·⋅∙•", r) }
+func isProduct(r rune) bool { return strings.ContainsRune("*·⋅∙•", r) }
 
 // unseen marks are dropped: zero-width space, byte order mark, soft hyphen.
 func unseen(r rune) bool { return r == '\u200B' || r == '\uFEFF' || r == '\u00AD' }

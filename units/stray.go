@@ -36,7 +36,7 @@ func (p *reader) numberInside(start int) error {
 // unclosed refuses a parenthesis that opens at start and does not end where a
 // symbol could.
 func (p *reader) unclosed(start int) error {
-	if p.peek() == 0 {
+	if p.peek() == end {
 		return p.fail(start, p.pos, "this parenthesis is not closed", "write ) where it ends")
 	}
 	return p.stray()
@@ -45,29 +45,31 @@ func (p *reader) unclosed(start int) error {
 // stray refuses a mark that no unit has.
 func (p *reader) stray() error {
 	r, n := utf8.DecodeRuneInString(p.text[p.pos:])
-	at, end := p.pos, p.pos+n
+	at, after := p.pos, p.pos+n
 	switch {
 	case isDigit(r):
 		return p.numberInside(at)
 	case r == '.' || unicode.IsSpace(r):
-		return p.apart(at, end, r)
-	case r == '+' && end < len(p.text) && isDigit(rune(p.text[end])):
-		return p.fail(at, end, "a power has no plus sign", "write "+p.text[:at]+"^"+p.text[end:])
+		return p.apart(at, after, r)
+	case r == '+' && after < len(p.text) && isDigit(rune(p.text[after])):
+		return p.fail(at, after, "a power has no plus sign", "write "+p.text[:at]+"^"+p.text[after:])
 	case r == '{' || r == '[' || r == '}' || r == ']':
-		return p.fail(at, end, "brackets and braces have no meaning inside a unit", "write the plain symbol, as in photon/nm^2")
+		return p.fail(at, after, "brackets and braces have no meaning inside a unit", "write the plain symbol, as in photon/nm^2")
+	case r == '(':
+		return p.fail(at, after, "a mark is missing before this parenthesis", "write * or / before it")
 	case r == ')':
-		return p.fail(at, end, "this parenthesis was never opened, or is empty", "leave it out")
+		return p.fail(at, after, "this parenthesis was never opened, or is empty", "leave it out")
 	case r == utf8.RuneError:
-		return p.fail(at, end, "this byte is no UTF-8 text", "save the text as UTF-8")
+		return p.fail(at, after, "this byte is no UTF-8 text", "save the text as UTF-8")
 	case r == '/' || isProduct(r):
-		return p.fail(at, end, "a symbol is missing before "+string(r), "write it, or leave the mark out")
+		return p.fail(at, after, "a symbol is missing before "+string(r), "write it, or leave the mark out")
 	}
-	return p.fail(at, end, fmt.Sprintf("%q has no meaning in a unit", r), "symbols are joined by /, * or ·, powers are written ^2")
+	return p.fail(at, after, fmt.Sprintf("%q has no meaning in a unit", r), "symbols are joined by /, * or ·, powers are written ^2")
 }
 
 // apart refuses a unit of several words or with points between its symbols,
 // and offers the one word that it would be.
-func (p *reader) apart(at, end int, r rune) error {
+func (p *reader) apart(at, after int, r rune) error {
 	msg := "a point does not join symbols"
 	if r != '.' {
 		msg = "a unit is one word without blanks"
@@ -81,7 +83,7 @@ func (p *reader) apart(at, end int, r rune) error {
 			hint = bad.Hint
 		}
 	}
-	return p.fail(at, end, msg, hint)
+	return p.fail(at, after, msg, hint)
 }
 
 // oneWord joins by * what stands apart; "per" is a solidus.

@@ -24,9 +24,6 @@ type part struct {
 	num, den int
 }
 
-// maxSixth is the largest exponent in sixths.
-const maxSixth = 21 * sixths
-
 // power raises a part; its exponent must be a multiple of 1/6 up to ±21.
 func (p part) power(num, den int) (part, error) {
 	p.num, p.den = reduce(p.num*num, p.den*den)

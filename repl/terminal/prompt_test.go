@@ -154,8 +154,10 @@ func TestPromptIsInterrupted(t *testing.T) {
 	s.sees("dose> 1+^C", "dose> wait", "waiting█")
 	s.types(ctrlC)
 	s.sees("dose> 1+^C", "dose> wait", "| stopped", "dose> █")
-	s.types("open\ra\rb" + ctrlC)
-	s.reads("      b^C\r\n")
+	s.types("open\ra\rb")
+	s.reads("\r      b")
+	s.types(ctrlC)
+	s.reads("      b^C\r\n\x1b[J\x1b[2K\r      ")
 	s.types(ctrlC)
 	s.reads("| the block was dropped\r\n")
 	s.reads("dose> ")
@@ -251,6 +253,7 @@ func TestPromptIsNarrowFromTheStart(t *testing.T) {
 		s.reads("dose> ")
 		s.types("1+1+1\x1b[D\x1b[D\x1b[1~pho\t\t\x15\r")
 		s.reads("| 3\r\n")
+		s.reads("dose> ")
 		s.types("\x12x" + ctrlC + ctrlD)
 		s.leaves(0)
 	}
@@ -284,7 +287,9 @@ func TestPromptRemembers(t *testing.T) {
 	s.reads("| 2\r\n")
 	s.types("open\r  a\rb\rend\r")
 	s.reads("| 2 lines\r\n")
-	s.types("open\rc\r" + ctrlC) // a block that was dropped is no entry
+	s.types("open\rc\r") // a block that was dropped is no entry
+	s.reads("      c\r\n\x1b[J\x1b[2K\r      ")
+	s.types(ctrlC)
 	s.reads("was dropped")
 	s.types(ctrlD)
 	s.leaves(0)

@@ -10,13 +10,13 @@ import (
 // apply makes the node of a call of a row that works on numbers.
 func (c *Checker) apply(k *Call) (*Node, error) {
 	f := k.Func
-	n := &Node{op: opCall, fn: f, At: k.Tree.Where, Owner: c.Owner}
+	n := c.made(Node{op: opCall, fn: f}, k.Tree.Where)
 	n.Type = Type{Kind: f.Result.Kind, Dim: f.Result.Dim, Plane: f.Result.Plane}
 	var types []Type
 	for i, p := range f.Params {
 		a := k.Args[i]
 		if a == nil { // a word is the number of its place
-			a = constant(float64(slices.Index(p.Words, k.Words[i])), Type{}, k.Tree.Where, c.Owner)
+			a = c.constant(float64(slices.Index(p.Words, k.Words[i])), Type{}, k.Tree.Where)
 		}
 		n.args = append(n.args, a)
 		types = append(types, a.Type)
@@ -26,7 +26,7 @@ func (c *Checker) apply(k *Call) (*Node, error) {
 		if err != nil {
 			return nil, c.ruleRefused(k, types, err)
 		}
-		n.Type = t
+		n.Type = t.item()
 	}
 	if i := f.Result.Follows; i > 0 {
 		n.Type.Plane = types[i-1].Plane
@@ -62,8 +62,10 @@ func (c *Checker) variadic(k *Call) (*Node, error) {
 	if len(k.Tree.Args) == 0 {
 		return nil, syntax.Fail(k.Tree.Where, f.Name+" needs at least one value", "write "+f.Name+"({1, 2, 3})")
 	}
-	n := &Node{op: opCall, fn: f, At: k.Tree.Where, Owner: c.Owner}
-	for _, a := range k.Tree.Args {
+	n := c.made(Node{op: opCall, fn: f}, k.Tree.Where)
+	var t Type            // of all arguments so far
+	var first syntax.Expr // the one that it comes from
+	for i, a := range k.Tree.Args {
 		if a.Label != "" {
 			return nil, syntax.Fail(a.LabelAt, f.Name+" has no argument "+a.Label, f.Signature())
 		}
@@ -74,25 +76,19 @@ func (c *Checker) variadic(k *Call) (*Node, error) {
 		if kind := x.Type.Kind; kind == Text || kind == ChainKind || kind == condition || kind == List && len(k.Tree.Args) > 1 {
 			return nil, syntax.Fail(a.X.Span(), f.Name+" takes numbers, or one list", f.Signature())
 		}
-		if len(n.args) > 0 {
-			first := n.args[0]
-			if err := c.comparable(k.Tree.Args[0].X, a.X, first.Type, x.Type, "stand side by side in "+f.Name); err != nil {
-				return nil, err
-			}
-			if first.Type.Kind != x.Type.Kind {
-				return nil, c.pair(k.Tree.Args[0].X, a.X, "temperature points and differences do not mix", "write all of them in degC")
-			}
+		if i == 0 {
+			t, first = x.Type.item(), a.X
+		}
+		if err := c.comparable(first, a.X, t, x.Type, "stand side by side in "+f.Name); err != nil {
+			return nil, err
+		}
+		if t.Kind != x.Type.item().Kind {
+			return nil, c.pair(first, a.X, "temperature points and differences do not mix", "write all of them in degC")
+		}
+		if t.Plane == "" && x.Type.Plane != "" {
+			t.Plane, first = x.Type.Plane, a.X
 		}
 		n.args = append(n.args, x)
-	}
-	t := n.args[0].Type
-	for _, a := range n.args {
-		if t.Plane == "" {
-			t.Plane = a.Type.Plane
-		}
-	}
-	if t.Kind == List {
-		t.Kind = Number
 	}
 	var err error
 	if n.Type, err = f.Rule([]Type{t}); err != nil {
@@ -108,7 +104,8 @@ func (c *Checker) own(x *syntax.Call, f *OwnFunction) (*Node, error) {
 		return nil, syntax.Fail(x.FuncAt, f.Name+" calls itself", "a function of the session has no recursion; write the steps as names")
 	}
 	c.use(f.Name)
-	inner := &Checker{Scope: c.Scope, Source: f.Source, Owner: c.Owner, Uses: c.Uses, Warnings: c.Warnings,
+	here := c.place(x.Where)
+	inner := &Checker{Scope: c.Scope, Source: f.Source, Owner: c.Owner, anchor: &here, size: c.size,
 		locals: map[string]*Node{}, inside: append(slices.Clone(c.inside), f.Name)}
 	if len(inner.inside) > 40 {
 		return nil, syntax.Fail(x.Where, "session functions call one another deeper than 40", "write the steps as names")
@@ -130,6 +127,7 @@ func (c *Checker) own(x *syntax.Call, f *OwnFunction) (*Node, error) {
 			return nil, syntax.Fail(x.Where, f.Name+" needs its argument "+p.Name, OwnSignature(f))
 		}
 	}
+	inner.Uses, inner.Warnings = c.Uses, c.Warnings
 	n, err := inner.plain(f.Body)
 	if err == nil && f.Stated != nil {
 		_, err = inner.StatedUnit(f.Stated, n, f.Body)
@@ -138,9 +136,7 @@ func (c *Checker) own(x *syntax.Call, f *OwnFunction) (*Node, error) {
 	if err != nil {
 		return nil, inside(f.Name, x.Where, err)
 	}
-	moved := *n
-	moved.At = x.Where
-	return &moved, nil
+	return n, nil
 }
 
 // bind checks an argument against what the parameter declares.
@@ -156,7 +152,7 @@ func (c *Checker) bind(inner *Checker, f *OwnFunction, p syntax.Param, x syntax.
 	if p.Stated == nil {
 		return nil
 	}
-	u, err := inner.unit(p.Stated.Unit, p.Stated.Where)
+	u, err := inner.StatedBare(p.Stated)
 	if err != nil {
 		return inside(f.Name, x.Span(), err)
 	}
@@ -166,12 +162,14 @@ func (c *Checker) bind(inner *Checker, f *OwnFunction, p syntax.Param, x syntax.
 	}
 	if p.Stated.Plane != "" {
 		if want.Plane, err = inner.plane(p.Stated.Plane); err != nil {
-			return syntax.Fail(x.Span(), err.Error(), c.planesHint())
+			return syntax.Fail(x.Span(), "in "+f.Name+": "+err.Error(), c.planesHint())
 		}
-		if n.Type.Plane == "" {
-			moved := *n
-			moved.Type.Plane = want.Plane
-			inner.locals[p.Name] = &moved
+		if !mayStand(want.Dim) {
+			return syntax.Fail(x.Span(), "in "+f.Name+": "+c.quantity(want.Dim)+" does not stand at a plane", "declare "+p.Name+" ["+p.Stated.Unit+"]")
+		}
+		if t := n.Type; t.Plane == "" {
+			t.Plane = want.Plane
+			inner.locals[p.Name] = c.retyped(n, t, x.Span())
 		}
 	}
 	return c.fits(&Function{Name: f.Name}, want, n, x)
@@ -196,11 +194,15 @@ func OwnSignature(f *OwnFunction) string {
 	return s + ")"
 }
 
-// inside moves a refusal from a function's text to the place of its call.
+// inside moves a refusal from a function's text to the place of its call. Of
+// functions that call one another the innermost is named.
 func inside(name string, at syntax.Span, err error) error {
 	e, ok := err.(*syntax.Error)
 	if !ok {
 		return err
+	}
+	if _, named := e.Cause.(*syntax.Error); named {
+		return &syntax.Error{Marks: []syntax.Span{at}, Msg: e.Msg, Hint: e.Hint, Cause: e.Cause}
 	}
 	return &syntax.Error{Marks: []syntax.Span{at}, Msg: "in " + name + ": " + e.Msg, Hint: e.Hint, Cause: e}
 }

@@ -3,6 +3,7 @@ package program
 import (
 	"fmt"
 	"math"
+	"strings"
 
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
@@ -15,9 +16,9 @@ func (c *Checker) negate(x *syntax.Unary) (*Node, error) {
 	}
 	t := c.kelvin(a, "-")
 	if v, ok := a.Constant(); ok {
-		return constant(-v, t, x.Where, c.Owner), nil
+		return c.constant(-v, t, x.Where), nil
 	}
-	return &Node{op: opNeg, args: []*Node{a}, Type: t, At: x.Where, Owner: c.Owner}, nil
+	return c.made(Node{op: opNeg, args: []*Node{a}, Type: t}, x.Where), nil
 }
 
 func (c *Checker) binary(x *syntax.Binary) (*Node, error) {
@@ -32,7 +33,7 @@ func (c *Checker) binary(x *syntax.Binary) (*Node, error) {
 	if err != nil {
 		return nil, err
 	}
-	n := &Node{args: []*Node{a, b}, At: x.Span(), Owner: c.Owner}
+	n := c.made(Node{args: []*Node{a, b}}, x.Where)
 	switch x.Op {
 	case "+", "-":
 		return c.sum(x, n)
@@ -81,7 +82,7 @@ func (c *Checker) comparable(x, y syntax.Expr, a, b Type, verb string) error {
 		hint := "one of them needs another factor; help units shows how units are written"
 		if join := sys.Between(a.Dim, b.Dim); join != "" {
 			msg += ": they differ by " + join
-			hint = fmt.Sprintf("%s * %s is a %s", c.word(x, a.Dim), spaced(join), c.plainName(b.Dim))
+			hint = c.wayFrom(x, a.Dim, b.Dim, join)
 		}
 		return &syntax.Error{Marks: []syntax.Span{x.Span(), y.Span()}, Msg: msg, Hint: hint, Cause: &units.DimensionError{Op: verb, Have: a.Dim, Rhs: b.Dim}}
 	}
@@ -92,6 +93,22 @@ func (c *Checker) comparable(x, y syntax.Expr, a, b Type, verb string) error {
 		return e
 	}
 	return nil
+}
+
+// wayFrom shows by which factor one side would become the other.
+func (c *Checker) wayFrom(x syntax.Expr, have, want units.Dimension, join string) string {
+	if have.IsNumber() || want.IsNumber() {
+		return "a pure number stands beside pure numbers only: write its unit behind it, or divide the other side by a reference value"
+	}
+	name, article := c.plainName(want), "a"
+	if strings.ContainsAny(name[:1], "aeiou") {
+		article = "an"
+	}
+	step := " * " + spaced(join)
+	if below, ok := strings.CutPrefix(join, "1/"); ok {
+		step = " / " + spaced(below)
+	}
+	return c.word(x, have) + step + " is " + article + " " + name
 }
 
 func (c *Checker) pair(x, y syntax.Expr, msg, hint string) *syntax.Error {
@@ -182,20 +199,18 @@ func (c *Checker) raise(x *syntax.Binary) (*Node, error) {
 	if !t.Pure() {
 		return nil, c.pair(x.X, x.Y, c.describe(t)+" is raised to constant rational powers only", "write the exponent as a number, such as 2 or (1/2)")
 	}
-	return &Node{op: opPow, args: []*Node{a, b}, At: x.Span(), Owner: c.Owner}, nil
+	return c.made(Node{op: opPow, args: []*Node{a, b}}, x.Where), nil
 }
 
 func (c *Checker) rationalPower(x *syntax.Binary, a *Node, t Type, num, den int) (*Node, error) {
-	n := &Node{op: opPower, args: []*Node{a}, value: float64(num) / float64(den), At: x.Span(), Owner: c.Owner}
+	n := c.made(Node{op: opPower, args: []*Node{a}, value: float64(num) / float64(den)}, x.Where)
 	var err error
 	if n.Type.Dim, err = t.Dim.Pow(num, den); err != nil {
 		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: c.rootRefused(t.Dim, err), Hint: "number_of(x) drops counted things on purpose", Cause: err}
 	}
-	plane, ok := t.Plane.power(num, den)
-	if !ok {
-		return nil, syntax.Fail(x.Span(), "the root of a plane has no meaning", "number_of(x) drops planes on purpose")
+	if n.Type.Plane, err = t.Plane.power(num, den); err != nil {
+		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: "the plane " + string(t.Plane) + " has no such power: " + err.Error(), Hint: "number_of(x) drops planes on purpose", Cause: err}
 	}
-	n.Type.Plane = plane
 	return n, nil
 }
 
@@ -226,9 +241,18 @@ func (c *Checker) at(x *syntax.At) (*Node, error) {
 		return nil, syntax.Fail(x.Span(), c.describe(t)+" does not stand at a plane", "planes are for power, energy, photon number and rate, irradiance and fluence, and ratios of planes")
 	}
 	t.Plane = p
-	n := *a
-	n.Type, n.At = t, x.Span()
-	return &n, nil
+	return c.retyped(a, t, x.Span()), nil
+}
+
+// retyped is a node with another type: what costs nothing is copied, the rest
+// is shared.
+func (c *Checker) retyped(n *Node, t Type, at syntax.Span) *Node {
+	if n.op == opConst || n.op == opRef {
+		same := *n
+		same.Type = t
+		return c.made(same, at)
+	}
+	return c.made(Node{op: opSame, args: []*Node{n}, Type: t}, at)
 }
 
 // isWhole says whether an exponent is an integer that multiplications serve.

@@ -81,7 +81,7 @@ func (c *Checker) branch(x *syntax.Call) (*Node, error) {
 	if a.Type != b.Type {
 		return nil, c.pair(x.Args[1].X, x.Args[2].X, "both values of if are of one kind: "+c.describe(a.Type)+" and "+c.describe(b.Type)+" are not", "state both the same way")
 	}
-	return &Node{op: opIf, args: []*Node{cond, a, b}, Type: a.Type, At: x.Where, Owner: c.Owner}, nil
+	return c.made(Node{op: opIf, args: []*Node{cond, a, b}, Type: a.Type}, x.Where), nil
 }
 
 // match fills the parameters from positional, then named arguments, then
@@ -139,7 +139,7 @@ func (c *Checker) fallback(k *Call, i int, p Param) error {
 		return nil
 	}
 	if p.Default == none {
-		k.Args[i] = constant(math.Inf(1), Type{Dim: p.Dim}, k.Tree.Where, c.Owner)
+		k.Args[i] = c.constant(math.Inf(1), Type{Dim: p.Dim}, k.Tree.Where)
 		return nil
 	}
 	s, bad := syntax.Parse(p.Default)
@@ -150,14 +150,13 @@ func (c *Checker) fallback(k *Call, i int, p Param) error {
 	if !ok {
 		return syntax.Fail(k.Tree.Where, "the default of "+p.Name+" has no value", "give "+p.Name)
 	}
-	inner := &Checker{Scope: c.Scope, Source: p.Default, Owner: c.Owner}
+	here := c.place(k.Tree.Where)
+	inner := &Checker{Scope: c.Scope, Source: p.Default, Owner: c.Owner, anchor: &here, size: c.size}
 	n, err := inner.check(show.X)
 	if err != nil {
-		return err
+		return inside(k.Func.Name, k.Tree.Where, err)
 	}
-	moved := *n
-	moved.At = k.Tree.Where
-	k.Args[i] = &moved
+	k.Args[i] = n
 	return nil
 }
 
@@ -168,9 +167,7 @@ func (c *Checker) argument(k *Call, i int, x syntax.Expr) error {
 			k.Words[i] = name.Name
 			return nil
 		}
-		if p.Dim.IsNumber() && p.Default == "" || !slices.Contains(p.Words, p.Default) {
-			return syntax.Fail(x.Span(), p.Name+" is one of the words "+strings.Join(p.Words, ", "), p.Doc)
-		}
+		return syntax.Fail(x.Span(), p.Name+" is one of the words "+strings.Join(p.Words, ", "), k.Func.Signature())
 	}
 	if p.IsPlane {
 		return c.planeArgument(k, i, x)
@@ -206,6 +203,8 @@ func (c *Checker) fits(f *Function, p Param, n *Node, x syntax.Expr) error {
 		return syntax.Fail(x.Span(), c.text(x.Span())+" is no chain", "a chain is defined by the lines chain NAME … end; see: help chain")
 	case p.Kind == ChainKind, p.Kind == List && t.Kind == List && t.Dim == p.Dim:
 		return nil
+	case p.Kind == List && t.Kind != List:
+		return syntax.Fail(x.Span(), p.Name+" of "+f.Name+" is a list, not "+c.describe(t), "a list is written {1, 2, 3}")
 	case t.Kind == List || t.Kind == Text || t.Kind == ChainKind || t.Kind == condition:
 		return syntax.Fail(x.Span(), p.Name+" of "+f.Name+" is "+c.quantity(p.Dim)+", not "+c.describe(t), f.Signature())
 	}
@@ -249,7 +248,7 @@ func (c *Checker) planeWayOn(x syntax.Expr, want Plane, t Type) string {
 
 // ends returns the planes of a ratio: WAFER/IF runs from IF to WAFER.
 func (p Plane) ends() (from, to string) {
-	to, from, _ = strings.Cut(string(p), "/")
+	to, from = p.sides()
 	return from, to
 }
 

@@ -14,14 +14,14 @@ func (c *Checker) Transmission(ch *Chain, from, to Plane, at syntax.Span) (*Node
 	if err != nil {
 		return nil, syntax.Fail(at, err.Error(), "a chain's line at NAME makes a plane")
 	}
-	n := constant(1, Type{}, at, c.Owner)
+	n := c.constant(1, Type{}, at)
 	for _, s := range steps {
 		if s.All != nil {
-			n = &Node{op: opMul, args: []*Node{n, s.All}, At: at, Owner: c.Owner}
+			n = c.made(Node{op: opMul, args: []*Node{n, s.All}}, at)
 		}
 	}
 	if against {
-		n = &Node{op: opDiv, args: []*Node{constant(1, Type{}, at, c.Owner), n}, At: at, Owner: c.Owner}
+		n = c.made(Node{op: opDiv, args: []*Node{c.constant(1, Type{}, at), n}}, at)
 	}
 	n.Type = Type{Plane: to.times(from, -1)}
 	return n, nil
@@ -43,9 +43,9 @@ func (c *Checker) Carry(n *Node, x syntax.Expr, ch *Chain, to Plane, at syntax.S
 	if err != nil {
 		return nil, err
 	}
-	out := &Node{op: opMul, args: []*Node{n, factor}, At: at, Owner: c.Owner}
+	out := c.made(Node{op: opMul, args: []*Node{n, factor}}, at)
 	if areas != nil {
-		out = &Node{op: opMul, args: []*Node{out, areas}, At: at, Owner: c.Owner}
+		out = c.made(Node{op: opMul, args: []*Node{out, areas}}, at)
 	}
 	out.Type = Type{Dim: t.Dim, Plane: to}
 	return out, nil
@@ -73,11 +73,11 @@ func (c *Checker) areaRatio(t Type, x syntax.Expr, ch *Chain, to Plane, at synta
 		if s.X == nil {
 			continue
 		}
-		area := &Node{op: opMul, args: []*Node{s.X, s.Y}, At: at, Owner: c.Owner}
+		area := c.made(Node{op: opMul, args: []*Node{s.X, s.Y}}, at)
 		if toWafer {
 			return area, nil
 		}
-		return &Node{op: opDiv, args: []*Node{constant(1, Type{}, at, c.Owner), area}, At: at, Owner: c.Owner}, nil
+		return c.made(Node{op: opDiv, args: []*Node{c.constant(1, Type{}, at), area}}, at), nil
 	}
 	return nil, syntax.Fail(at, ch.Name+" states no reduction, which gives the ratio of areas between MASK and WAFER", "add the line reduction: 4, 4 to the chain")
 }

@@ -55,7 +55,7 @@ func (c *Checker) ChainBlock(b *syntax.Block) (*Node, error) {
 	if err := c.factorPlanes(ch, b); err != nil {
 		return nil, err
 	}
-	return &Node{op: opChain, chain: ch, Type: Type{Kind: ChainKind}, At: b.NameAt, Owner: c.Owner}, nil
+	return c.made(Node{op: opChain, chain: ch, Type: Type{Kind: ChainKind}}, b.NameAt), nil
 }
 
 func (ch *Chain) planes() []Plane {
@@ -164,9 +164,20 @@ func (c *Checker) reduction(s Step, line syntax.BlockLine) (Step, error) {
 		if v, ok := n.Constant(); !n.Type.Pure() || ok && !(v > 0) {
 			return s, syntax.Fail(line.Items[i].Span(), "a reduction is a number greater than 0", "write reduction: 4, 4")
 		}
-		*to = n
+		*to = positive(n)
 	}
 	return s, nil
+}
+
+// positive makes the node of a reduction that refuses what is none.
+func positive(n *Node) *Node {
+	f := &Function{Name: "reduction", Call: func(x []float64) (float64, []string, error) {
+		if !(x[0] > 0) {
+			return 0, nil, fmt.Errorf("the reduction is %s; it is a number greater than 0", units.FormatNumber(x[0], 5))
+		}
+		return x[0], nil, nil
+	}}
+	return &Node{op: opCall, fn: f, args: []*Node{n}, At: n.At, Owner: n.Owner}
 }
 
 // factorPlanes allows a factor that is a ratio of the planes around it.

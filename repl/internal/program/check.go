@@ -43,10 +43,42 @@ type Checker struct {
 	Owner    string   // the name it defines, "" for none
 	Warnings []string // each said once
 	Uses     []string // names and session functions it rests on, each once
-	Stated   *units.Unit
 
 	locals map[string]*Node
-	inside []string // session functions being checked
+	inside []string     // session functions being checked
+	anchor *syntax.Span // where all parts of this text are said to stand; nil for their own places
+	size   *int         // expressions checked so far, those of session functions at each call
+}
+
+// made finishes a node for the text at a place.
+func (c *Checker) made(n Node, at syntax.Span) *Node {
+	n.At, n.Owner = c.place(at), c.Owner
+	return &n
+}
+
+func (c *Checker) constant(v float64, t Type, at syntax.Span) *Node {
+	return c.made(Node{op: opConst, value: v, Type: t}, at)
+}
+
+// place is where a part of this text is said to stand.
+func (c *Checker) place(at syntax.Span) syntax.Span {
+	if c.anchor != nil {
+		return *c.anchor
+	}
+	return at
+}
+
+// grown refuses a formula that becomes too large: session functions that call
+// one another can double it at every step.
+func (c *Checker) grown(at syntax.Span) error {
+	if c.size == nil {
+		c.size = new(int)
+	}
+	if *c.size++; *c.size <= MaxNodes {
+		return nil
+	}
+	return &syntax.Error{Marks: []syntax.Span{at}, Cause: ErrSize,
+		Msg: fmt.Sprintf("this formula has more than %d parts", MaxNodes), Hint: "give parts of it names of their own"}
 }
 
 // Check gives an expression its meaning. The error is a *syntax.Error.
@@ -59,13 +91,16 @@ func (c *Checker) Check(x syntax.Expr) (*Node, error) {
 }
 
 func (c *Checker) check(x syntax.Expr) (*Node, error) {
+	if err := c.grown(x.Span()); err != nil {
+		return nil, err
+	}
 	switch x := x.(type) {
 	case *syntax.Literal:
 		return c.literal(x)
 	case *syntax.Name:
 		return c.name(x)
 	case *syntax.String:
-		return &Node{op: opText, text: x.Text, Type: Type{Kind: Text}, At: x.Where, Owner: c.Owner}, nil
+		return c.made(Node{op: opText, text: x.Text, Type: Type{Kind: Text}}, x.Where), nil
 	case *syntax.Unary:
 		return c.negate(x)
 	case *syntax.Binary:
@@ -92,12 +127,19 @@ func (c *Checker) use(name string) {
 	}
 }
 
-// text returns what stands at a span.
+// longest is how many characters of a statement a message quotes.
+const longest = 60
+
+// text returns what stands at a span; what is long is cut.
 func (c *Checker) text(at syntax.Span) string {
 	if at.Start < 0 || at.End > len(c.Source) || at.Start > at.End {
 		return ""
 	}
-	return syntax.Visible(c.Source[at.Start:at.End])
+	text := []rune(syntax.Visible(c.Source[at.Start:at.End]))
+	if len(text) > longest {
+		return string(text[:longest]) + "…"
+	}
+	return string(text)
 }
 
 // plain checks an expression that must be a number or a temperature point.
@@ -122,14 +164,14 @@ func (c *Checker) name(x *syntax.Name) (*Node, error) {
 		return n, nil
 	}
 	if n := c.Scope.Constant(x.Name); n != nil {
-		return constant(n.value, n.Type, x.Where, c.Owner), nil
+		return c.constant(n.value, n.Type, x.Where), nil
 	}
 	if n := c.Scope.Node(x.Name); n != nil {
 		c.use(x.Name)
 		if n.op == opChain {
 			return n, nil
 		}
-		return &Node{op: opRef, name: x.Name, Type: n.Type, At: x.Where, Owner: c.Owner}, nil
+		return c.made(Node{op: opRef, name: x.Name, Type: n.Type}, x.Where), nil
 	}
 	return nil, c.unknown(x)
 }
@@ -137,44 +179,40 @@ func (c *Checker) name(x *syntax.Name) (*Node, error) {
 // unknown refuses a name, with the likeliest reason.
 func (c *Checker) unknown(x *syntax.Name) error {
 	name := x.Name
+	e := syntax.Fail(x.Where, name+" is no name that is known here", "define it first: "+name+" = …")
+	e.Cause = ErrUnknown
 	if c.Scope.Function(name) != nil || c.Scope.Own(name) != nil {
-		return syntax.Fail(x.Where, name+" is a function; it takes its arguments in parentheses", "see: help "+name)
+		e.Msg, e.Hint = name+" is a function; it takes its arguments in parentheses", "see: help "+name
+	} else if near := c.Scope.Near(name); len(near) > 0 {
+		e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
+	} else if _, err := c.Scope.Units().Parse(name); err == nil {
+		e.Msg, e.Hint = name+" is a unit, and a unit stands right behind a number", "write 1 "+name
+	} else if c.knownPlane(Plane(name)) {
+		e.Msg, e.Hint = name+" is a plane, no value", "a plane stands behind at, as in 250 W at "+name
 	}
-	if near := c.Scope.Near(name); len(near) > 0 {
-		return syntax.Fail(x.Where, name+" is no name that is known here", "did you mean "+strings.Join(near, " or ")+"?")
-	}
-	if _, err := c.Scope.Units().Parse(name); err == nil {
-		return syntax.Fail(x.Where, name+" is a unit, and a unit stands right behind a number", "write 1 "+name)
-	}
-	if c.knownPlane(Plane(name)) {
-		return syntax.Fail(x.Where, name+" is a plane, no value", "a plane stands behind at, as in 250 W at "+name)
-	}
-	return syntax.Fail(x.Where, name+" is no name that is known here", "define it first: "+name+" = …")
+	return e
 }
 
 func (c *Checker) list(x *syntax.List) (*Node, error) {
-	n := &Node{op: opList, Type: Type{Kind: List}, At: x.Where, Owner: c.Owner}
+	n := Node{op: opList, Type: Type{Kind: List}}
 	for i, item := range x.Items {
 		a, err := c.plain(item)
 		if err != nil {
 			return nil, err
 		}
 		if i == 0 {
-			n.Type.Dim, n.Type.Plane = a.Type.Dim, a.Type.Plane
-		}
-		if a.Type.Dim != n.Type.Dim || a.Type.Plane != n.Type.Plane {
-			return nil, &syntax.Error{
-				Marks: []syntax.Span{x.Items[0].Span(), item.Span()},
-				Msg:   "a list holds one dimension at one plane: " + c.describe(n.args[0].Type) + " and " + c.describe(a.Type) + " do not mix",
-				Hint:  "make two lists of it", Cause: units.ErrDimension,
-			}
+			n.Type = Type{Kind: List, Dim: a.Type.Dim, Plane: a.Type.Plane, Points: a.Type.Kind == Point}
+		} else if first := n.args[0].Type; a.Type != first {
+			e := c.pair(x.Items[0], item, "a list holds one dimension at one plane: "+c.describe(first)+" and "+c.describe(a.Type)+" do not mix", "make two lists of it")
+			e.Cause = units.ErrDimension
+			return nil, e
 		}
 		n.args = append(n.args, a)
 	}
 	if len(n.args) == 0 {
 		return nil, syntax.Fail(x.Where, "this list is empty", "write at least one value: {1, 2, 3}")
 	}
-	return n, nil
+	return c.made(n, x.Where), nil
 }
 
 // exponent reads a constant rational exponent from the text, exactly.

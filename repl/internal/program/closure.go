@@ -10,6 +10,8 @@ func (c *compiler) closure(n *Node) operand {
 	switch n.op {
 	case opConst:
 		return operand{fixed: true, value: n.value, place: -1}
+	case opSame:
+		return c.emit(n.args[0])
 	case opNeg:
 		a := c.emit(n.args[0]).eval()
 		return operand{run: func(f *Frame) float64 { return -a(f) }, place: -1}
@@ -114,14 +116,25 @@ func (c *compiler) power(n *Node) eval {
 	case isWhole(p):
 		k := int(-p)
 		return func(f *Frame) float64 {
-			x := powInt(a(f), k)
-			if x == 0 {
-				return f.fail(n, ErrDivision)
+			x := a(f)
+			if y := powInt(x, k); y != 0 && y-y == 0 {
+				return 1 / y
 			}
-			return 1 / x
+			return f.raised(n, x, p, realPower)
 		}
 	}
-	return func(f *Frame) float64 { return f.checked(n, realPower(a(f), p)) }
+	return func(f *Frame) float64 { return f.raised(n, a(f), p, realPower) }
+}
+
+// raised raises x to the power p and refuses what must not vanish in it.
+func (f *Frame) raised(n *Node, x, p float64, power func(x, p float64) float64) float64 {
+	switch {
+	case x-x != 0 || p-p != 0:
+		return f.fail(n, ErrNotFinite)
+	case x == 0 && p < 0:
+		return f.fail(n, ErrDivision)
+	}
+	return f.checked(n, power(x, p))
 }
 
 // realPower raises to a constant; the cube root of a negative number is real.
@@ -147,7 +160,7 @@ func powInt(x float64, n int) float64 {
 
 func (c *compiler) pow(n *Node) eval {
 	a, b := c.emit(n.args[0]).eval(), c.emit(n.args[1]).eval()
-	return func(f *Frame) float64 { return f.checked(n, math.Pow(a(f), b(f))) }
+	return func(f *Frame) float64 { return f.raised(n, a(f), b(f), math.Pow) }
 }
 
 // checked refuses what is no finite number at the node that made it.
@@ -164,7 +177,7 @@ func (c *compiler) branch(n *Node) eval {
 	holds := comparison(cond.cmp)
 	return func(f *Frame) float64 {
 		u, v := x(f), y(f)
-		if d := u - v; d-d != 0 {
+		if u-u != 0 || v-v != 0 {
 			return f.fail(cond, ErrNotFinite)
 		}
 		if holds(u, v) {

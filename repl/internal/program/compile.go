@@ -14,6 +14,7 @@ const MaxNodes = 200_000
 // Program is a compiled formula. It is never changed and may be run by many
 // goroutines at once, each with a Frame of its own.
 type Program struct {
+	node   *Node
 	root   eval
 	steps  []step
 	size   int // places in a frame
@@ -64,7 +65,7 @@ type Resolve func(name string) (*Node, error)
 // open: Run takes their values in this order.
 func Compile(root *Node, resolve Resolve, inputs ...string) (*Program, error) {
 	c := &compiler{resolve: resolve, info: map[*Node]*nodeInfo{}, names: map[string]*Node{}}
-	p := &Program{Inputs: inputs}
+	p := &Program{node: root, Inputs: inputs}
 	for i, name := range inputs {
 		n := &Node{op: opInput, name: name}
 		c.names[name] = n
@@ -86,7 +87,7 @@ func (p *Program) NewFrame() *Frame {
 
 // Run computes the value for the given inputs. The error is a *RunError.
 func (p *Program) Run(f *Frame, inputs ...float64) (float64, error) {
-	copy(f.v, inputs)
+	copy(f.v[:len(p.Inputs)], inputs)
 	f.err = nil
 	f.run++
 	for _, s := range p.steps {
@@ -100,7 +101,7 @@ func (p *Program) Run(f *Frame, inputs ...float64) (float64, error) {
 		return 0, f.err
 	}
 	if x-x != 0 {
-		return 0, &RunError{Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
+		return 0, &RunError{Node: p.node, Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
 	}
 	return x, nil
 }

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"strings"
 	"unicode"
+	"unicode/utf8"
 
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
@@ -26,7 +27,7 @@ func (c *Checker) literal(x *syntax.Literal) (*Node, error) {
 	if unit.Point() {
 		t.Kind = Point
 	}
-	return constant(v, t, x.Where, c.Owner), nil
+	return c.constant(v, t, x.Where), nil
 }
 
 // shorten keeps a long number from filling the screen.
@@ -67,31 +68,36 @@ func (c *Checker) nameBehind(x *syntax.Literal, err error) error {
 		return err
 	}
 	known := c.locals[bad.Symbol] != nil || c.Scope.Node(bad.Symbol) != nil
-	before := strings.TrimRight(x.Unit[:bad.Start], "(")
 	if !known && bad.Hint != "" {
 		return err
 	}
-	joint, verb := "", "multiply"
-	if before != "" {
-		joint = before[len(before)-1:]
-		before = before[:len(before)-1]
-	}
-	switch joint {
-	case "/":
-		verb = "divide"
-	case "":
-		joint = "*"
-	default:
-		joint = "*"
-	}
-	number := strings.TrimSpace(c.text(x.NumberAt) + " " + before)
-	rest := strings.TrimRight(x.Unit[bad.Start:], ")")
 	return &syntax.Error{
 		Marks: []syntax.Span{{Start: x.UnitAt.Start + bad.Start, End: x.UnitAt.Start + bad.End}},
 		Msg:   bad.Symbol + " is no unit",
-		Hint:  "to " + verb + " by the name " + bad.Symbol + " write " + number + " " + joint + " " + rest,
+		Hint:  c.apart(c.text(x.NumberAt), x.Unit, bad),
 		Cause: err,
 	}
+}
+
+// apart writes number, unit and name so that the name is outside of the unit.
+func (c *Checker) apart(number, unit string, bad *units.ParseError) string {
+	before, rest := unit[:bad.Start], unit[bad.Start:]
+	if grouped := strings.HasSuffix(before, "("); grouped && strings.ContainsAny(rest, "/*·⋅∙•") {
+		before, rest = strings.TrimRight(before, "("), "("+rest
+	} else {
+		before, rest = strings.TrimRight(before, "("), strings.TrimRight(rest, ")")
+	}
+	joint, verb := "*", "multiply"
+	if r, n := utf8.DecodeLastRuneInString(before); strings.ContainsRune("/*·⋅∙•", r) {
+		before = before[:len(before)-n]
+		if r == '/' {
+			joint, verb = "/", "divide"
+		}
+	}
+	if strings.Contains(before, "(") {
+		return "a name stands behind the unit, with blanks around / or *"
+	}
+	return "to " + verb + " by the name " + bad.Symbol + " write " + strings.TrimSpace(number+" "+before) + " " + joint + " " + rest
 }
 
 // nameShadowed notes that a unit symbol is also a name.
@@ -107,8 +113,7 @@ func (c *Checker) nameShadowed(x *syntax.Literal) {
 // StatedUnit reads a unit in brackets and checks that it can state a value of
 // type t; name is what the value is called in messages.
 func (c *Checker) StatedUnit(s *syntax.Stated, n *Node, x syntax.Expr) (units.Unit, error) {
-	at := syntax.Span{Start: s.Where.Start + 1, End: s.Where.End - 1}
-	u, err := c.unit(s.Unit, at)
+	u, err := c.StatedBare(s)
 	if err != nil {
 		return u, err
 	}
@@ -170,5 +175,11 @@ func (c *Checker) hertzHint(x syntax.Expr) string {
 
 // StatedBare reads the unit in a bracket alone.
 func (c *Checker) StatedBare(s *syntax.Stated) (units.Unit, error) {
-	return c.unit(s.Unit, syntax.Span{Start: s.Where.Start + 1, End: s.Where.End - 1})
+	at := syntax.Span{Start: s.Where.Start + 1, End: s.Where.End - 1}
+	if at.Start <= at.End && at.End <= len(c.Source) {
+		if i := strings.Index(c.Source[at.Start:at.End], s.Unit); i >= 0 {
+			at = syntax.Span{Start: at.Start + i, End: at.Start + i + len(s.Unit)}
+		}
+	}
+	return c.unit(s.Unit, at)
 }

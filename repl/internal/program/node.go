@@ -40,6 +40,7 @@ const (
 	opText
 	opChain
 	opInput // a place that whoever runs the program fills
+	opSame  // its operand, of another type
 )
 
 // Text returns the text of a text.
@@ -75,14 +76,9 @@ func (n *Node) names(seen map[*Node]bool, yield func(string)) {
 	}
 }
 
-// constant makes a number that needs no text.
-func constant(v float64, t Type, at syntax.Span, owner string) *Node {
-	return &Node{op: opConst, value: v, Type: t, At: at, Owner: owner}
-}
-
 // NewConstant makes the node of a named constant.
 func NewConstant(v units.Quantity) *Node {
-	return constant(v.SI(), Type{Dim: v.Dimension()}, syntax.Span{}, "")
+	return &Node{op: opConst, value: v.SI(), Type: Type{Dim: v.Dimension()}}
 }
 
 // Items returns the nodes of a list's items.

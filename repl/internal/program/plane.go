@@ -34,36 +34,72 @@ func (p Plane) times(q Plane, sign int) Plane {
 	return planeOf(e)
 }
 
-// power returns p to the power num/den; ok is false when that has no sixths.
-func (p Plane) power(num, den int) (Plane, bool) {
+// power returns p to the power num/den, with the errors that dimensions have.
+func (p Plane) power(num, den int) (Plane, error) {
 	e := p.exponents()
 	for name, n := range e {
 		if n*num%den != 0 {
-			return "", false
+			return "", units.ErrRoot
 		}
-		e[name] = n * num / den
+		if e[name] = n * num / den; max(e[name], -e[name]) > largestExponent {
+			return "", units.ErrExponent
+		}
 	}
-	return planeOf(e), true
+	return planeOf(e), nil
 }
 
-// exponents are in sixths, as those of dimensions.
+const (
+	sixths          = 6 // exponents are held in sixths, as those of dimensions
+	largestExponent = 21 * sixths
+)
+
+// exponents are in sixths.
 func (p Plane) exponents() map[string]int {
 	e := map[string]int{}
-	over, under, _ := strings.Cut(string(p), "/")
-	for sign, part := range map[int]string{6: over, -6: under} {
-		for _, f := range strings.Split(part, "·") {
-			name, power, raised := strings.Cut(f, "^")
-			n := sign
-			if raised {
-				x, _ := strconv.ParseFloat(power, 64)
-				n = int(x * float64(sign))
-			}
-			if name != "" && name != "1" {
-				e[name] += n
+	over, under := p.sides()
+	for _, f := range strings.Split(over, "·") {
+		name, n := planeFactor(f)
+		e[name] += n
+	}
+	for _, f := range strings.Split(under, "·") {
+		name, n := planeFactor(f)
+		e[name] -= n
+	}
+	delete(e, "")
+	delete(e, "1")
+	return e
+}
+
+// sides cuts a plane at its solidus, which is none of those in parentheses.
+func (p Plane) sides() (over, under string) {
+	depth := 0
+	for i, r := range p {
+		switch r {
+		case '(':
+			depth++
+		case ')':
+			depth--
+		case '/':
+			if depth == 0 {
+				return string(p[:i]), string(p[i+1:])
 			}
 		}
 	}
-	return e
+	return string(p), ""
+}
+
+// planeFactor reads "IF", "IF^2" or "IF^(1/3)"; the exponent is in sixths.
+func planeFactor(text string) (name string, n int) {
+	name, power, raised := strings.Cut(text, "^")
+	if !raised {
+		return name, sixths
+	}
+	over, under, fraction := strings.Cut(strings.Trim(power, "()"), "/")
+	n, _ = strconv.Atoi(over) // planePower wrote it
+	if den, _ := strconv.Atoi(under); fraction && den > 0 {
+		return name, n * sixths / den
+	}
+	return name, n * sixths
 }
 
 func planeOf(e map[string]int) Plane {
@@ -89,10 +125,17 @@ func planeOf(e map[string]int) Plane {
 }
 
 func planePower(name string, n int) string {
-	if n == 6 {
+	switch {
+	case n == sixths:
 		return name
+	case n%sixths == 0:
+		return fmt.Sprintf("%s^%d", name, n/sixths)
+	case n%3 == 0:
+		return fmt.Sprintf("%s^(%d/2)", name, n/3)
+	case n%2 == 0:
+		return fmt.Sprintf("%s^(%d/3)", name, n/2)
 	}
-	return name + "^" + strconv.FormatFloat(float64(n)/6, 'g', 4, 64)
+	return fmt.Sprintf("%s^(%d/6)", name, n)
 }
 
 // plane reads "IF" or "WAFER/IF" and checks that its parts are known.

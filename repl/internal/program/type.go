@@ -1,6 +1,8 @@
 package program
 
 import (
+	"strings"
+
 	"example.com/dosewright/units"
 )
 
@@ -19,9 +21,21 @@ const (
 
 // Type is all that checking knows of a value.
 type Type struct {
-	Kind  Kind
-	Dim   units.Dimension
-	Plane Plane
+	Kind   Kind
+	Dim    units.Dimension
+	Plane  Plane
+	Points bool // a list holds temperature points
+}
+
+// item is the type of one value of a list; other types are their own.
+func (t Type) item() Type {
+	if t.Points {
+		return Type{Kind: Point, Dim: t.Dim}
+	}
+	if t.Kind == List {
+		t.Kind = Number
+	}
+	return t
 }
 
 // Pure says whether the value is a plain number without a plane.
@@ -35,9 +49,11 @@ func (c *Checker) describe(t Type) string {
 	case ChainKind:
 		return "a chain"
 	case List:
-		return "a list of " + c.describe(Type{Dim: t.Dim})
+		return "a list of " + strings.Replace(c.describe(t.item()), "a temperature point", "temperature points", 1)
 	case Point:
 		return "a temperature point"
+	case condition:
+		return "a condition"
 	}
 	s := c.quantity(t.Dim)
 	if t.Plane != "" {
@@ -67,9 +83,9 @@ func (t Type) Root(n int) (Type, error) {
 	if err != nil {
 		return t, err
 	}
-	p, ok := t.Plane.power(1, n)
-	if !ok {
-		return t, units.ErrRoot
+	p, err := t.Plane.power(1, n)
+	if err != nil {
+		return t, err
 	}
 	return Type{Dim: d, Plane: p}, nil
 }
