@@ -19,7 +19,10 @@ type Row struct {
 	// each perhaps with ": what it is" behind it.
 	Args []string
 	// Plane of the result: "", "IF", or "as NAME" for that of an argument.
-	Plane   string
+	Plane string
+	// Unit in which an answer is stated when the call stands alone, "" for the
+	// usual one of the dimension.
+	Unit    string
 	Formula string
 	Valid   string
 	Source  string
@@ -38,7 +41,7 @@ func bound(row Row, result program.Param, params []program.Param, call func([]fl
 	f := &program.Function{
 		Name: row.Name, Section: row.Section, Summary: row.Summary, Formula: row.Formula,
 		Valid: row.Valid, Source: row.Source, Example: row.Example, Caution: row.Caution,
-		Result: program.Result{Dim: result.Dim, Kind: result.Kind},
+		Result: program.Result{Dim: result.Dim, Kind: result.Kind, Unit: row.Unit},
 	}
 	for i, p := range params {
 		if i < len(row.Args) {

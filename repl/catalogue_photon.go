@@ -2,7 +2,7 @@ package repl
 
 import "example.com/dosewright/euv"
 
-// photonRows: photons, dose, shapes and the Bragg condition.
+// photonRows: photons, dose and shapes.
 func photonRows() []Function {
 	const section = "Photons and dose"
 	exact := "exact SI constants (SI Brochure, 9th edition, table 1)"
@@ -34,13 +34,5 @@ func photonRows() []Function {
 		Bind2(Row{Name: "ellipse_area", Section: section, Summary: "area of an ellipse of two full axes",
 			Args: []string{"a", "b"}, Formula: "π a b / 4", Valid: "axes > 0", Source: "geometry",
 			Example: "ellipse_area(20 nm, 30 nm)"}, euv.EllipseArea),
-		Bind4(Row{Name: "bragg_period", Section: "Mirrors", Summary: "period of a multilayer that reflects a wavelength at an angle from the normal",
-			Args:    []string{"wavelength", "angle = 0 deg: from the normal", "order = 1: whole number", "delta = 0: mean of 1 − n over the period"},
-			Formula: "m λ = 2 d √((1 − δ)² − sin²θ)", Valid: "angle below 90°; without delta the kinematic value, which is too short",
-			Source: "Bragg condition with mean refraction; twin: computed stacks of the checks", Example: "bragg_period(13.5 nm, delta = 0.03108)"}, euv.BraggPeriod),
-		Bind4(Row{Name: "bragg_wavelength", Section: "Mirrors", Summary: "wavelength that a multilayer of a period reflects",
-			Args:    []string{"period", "angle = 0 deg: from the normal", "order = 1: whole number", "delta = 0: mean of 1 − n over the period"},
-			Formula: "m λ = 2 d √((1 − δ)² − sin²θ)", Valid: "as bragg_period", Source: "as bragg_period",
-			Example: "bragg_wavelength(6.9665 nm, delta = 0.03108)"}, euv.BraggWavelength),
 	}
 }

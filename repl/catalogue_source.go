@@ -11,7 +11,7 @@ func sourceRows() []Function {
 				"overhead: time of a wafer in which nothing is exposed, in s/wafer", "transmission at WAFER/IF"},
 			Plane: "IF", Formula: "P = D N A / (T (1/throughput − overhead))", Valid: "throughput < 1/overhead",
 			Source:  "energy balance of the exposing time",
-			Example: "source_power(34 mJ/cm^2, 150 wafer/h, 96 field/wafer, 8.58 cm^2/field, 9.5 s/wafer, 0.9 %)",
+			Example: "source_power(34 mJ/cm^2, 150 wafer/h, 96 field/wafer, 8.58 cm^2/field, 9 s/wafer, 0.9 %)",
 			Caution: electricCaution}, euv.SourcePower),
 		Bind1(Row{Name: "collected_fraction", Section: section, Summary: "part of a uniform emission into the half space that a solid angle collects",
 			Args: []string{"solid_angle: in sr, at most 2π"}, Formula: "Ω / 2π", Valid: "0 < Ω ≤ 2π sr", Source: "geometry",

@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"context"
 	"math"
 
 	"example.com/dosewright/repl/internal/program"
@@ -46,10 +47,10 @@ func (s *Session) check(j job) ([]Result, error) {
 	}
 	v := &Verdict{Op: a.Op}
 	var err error
-	if v.Left, err = s.single(a.X, c); err != nil {
+	if v.Left, err = s.single(j.ctx, a.X, c); err != nil {
 		return nil, err
 	}
-	if v.Right, err = s.single(a.Y, c); err != nil {
+	if v.Right, err = s.single(j.ctx, a.Y, c); err != nil {
 		return nil, err
 	}
 	if v.Left.Point == v.Right.Point {
@@ -59,11 +60,11 @@ func (s *Session) check(j job) ([]Result, error) {
 		v.Holds = program.Holds(a.Op, v.Left.SI, v.Right.SI)
 		return []Result{v}, nil
 	}
-	return s.within(a, v, c)
+	return s.within(j.ctx, a, v, c)
 }
 
-func (s *Session) within(a *syntax.Check, v *Verdict, c *program.Checker) ([]Result, error) {
-	w, err := s.single(a.Within, c)
+func (s *Session) within(ctx context.Context, a *syntax.Check, v *Verdict, c *program.Checker) ([]Result, error) {
+	w, err := s.single(ctx, a.Within, c)
 	if err != nil {
 		return nil, err
 	}
@@ -89,8 +90,8 @@ func percent(x syntax.Expr) bool {
 }
 
 // single is the value of an expression that must have one.
-func (s *Session) single(x syntax.Expr, c *program.Checker) (*Value, error) {
-	v, err := s.answer(x, nil, c)
+func (s *Session) single(ctx context.Context, x syntax.Expr, c *program.Checker) (*Value, error) {
+	v, err := s.answer(ctx, x, nil, c)
 	if err == nil && v == nil {
 		err = syntax.Fail(x.Span(), "this has no single value", "take one of it, such as mean(…)")
 	}

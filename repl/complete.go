@@ -72,7 +72,7 @@ func (s *Session) argumentOffers(c calling, word string) []string {
 		if p.IsPlane {
 			return beginning(word, planeNames(scope{s}.Planes()))
 		}
-		list = append(list, s.definedNames(func(d *definition) bool { return d.node != nil && fitting(p, d.node.Type) })...)
+		list = append(list, s.definedNames(func(d *definition) bool { return d.node != nil && suits(p, d.node.Type) })...)
 	}
 	if c.label == "" {
 		for i, q := range f.Params {
@@ -84,7 +84,7 @@ func (s *Session) argumentOffers(c calling, word string) []string {
 	return beginning(word, append(list, s.expressionWords(list)...))
 }
 
-func fitting(p *program.Param, t program.Type) bool {
+func suits(p *program.Param, t program.Type) bool {
 	if p.Kind == program.ChainKind {
 		return t.Kind == program.ChainKind
 	}

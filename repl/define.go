@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"context"
 	"strings"
 
 	"example.com/dosewright/repl/internal/program"
@@ -10,7 +11,7 @@ import (
 func (s *Session) show(j job) ([]Result, error) {
 	a := j.do.(*syntax.Show)
 	c := s.checker(j.text, "")
-	v, err := s.answer(a.X, a.Stated, c)
+	v, err := s.answer(j.ctx, a.X, a.Stated, c)
 	if err != nil {
 		return nil, err
 	}
@@ -52,7 +53,7 @@ func (s *Session) define(j job) ([]Result, error) {
 	if err := s.install(d, a.NameAt); err != nil {
 		return nil, err
 	}
-	return s.valueResults(d)
+	return s.valueResults(j.ctx, d)
 }
 
 // nameable refuses constants as names, and a name that its own formula uses.
@@ -88,6 +89,7 @@ func (s *Session) checked(d *definition) error {
 		d.own = &program.OwnFunction{Name: a.Name, Params: a.Params, Stated: a.Stated, Body: a.X, Source: d.text}
 	}
 	d.uses, d.warning = c.Uses, c.Warnings
+	d.source = d.node != nil && program.Uncertain(d.node, func(string) bool { return false })
 	return err
 }
 
@@ -103,6 +105,7 @@ func (s *Session) checkedValue(d *definition, a *syntax.Define, c *program.Check
 	}
 	d.node, d.bare = n, bare(a.X)
 	if a.Stated == nil {
+		d.unit = s.rowUnit(a.X)
 		return nil
 	}
 	u, err := c.StatedUnit(a.Stated, n, a.X)
@@ -127,7 +130,7 @@ func bare(x syntax.Expr) bool {
 	return false
 }
 
-func (s *Session) valueResults(d *definition) ([]Result, error) {
+func (s *Session) valueResults(ctx context.Context, d *definition) ([]Result, error) {
 	if d.node.Type.Kind == program.List || d.bare {
 		return noteOnly(d.warning), nil
 	}
@@ -135,7 +138,11 @@ func (s *Session) valueResults(d *definition) ([]Result, error) {
 	if err != nil {
 		return nil, err
 	}
-	return []Result{s.value(v, d.node.Type, d.unit, d.warning)}, nil
+	value := s.value(v, d.node.Type, d.unit, d.warning)
+	if err := s.addUncertainty(ctx, value, d.node); err != nil {
+		return nil, s.blame(err, s.checker(d.text, d.name))
+	}
+	return []Result{value}, nil
 }
 
 func noteOnly(warnings []string) []Result {
@@ -162,7 +169,7 @@ func (s *Session) defineFunction(j job) ([]Result, error) {
 	}
 	var spread syntax.Expr
 	syntax.Each(a.X, func(x syntax.Expr) {
-		if l, ok := x.(*syntax.Literal); ok && (l.Spread != nil || strings.Contains(l.Number, "(")) {
+		if l, ok := x.(*syntax.Literal); ok && (l.Spread != nil || strings.Contains(l.Number, "(")) || uncertainCall(x) {
 			spread = x
 		}
 	})

@@ -27,6 +27,7 @@ type definition struct {
 	bare    bool // a literal alone, which prints nothing
 	uses    []string
 	warning []string
+	source  bool // an uncertain input stands in its own formula
 
 	known bool // value and err are those of the present definitions
 	value float64
@@ -38,6 +39,8 @@ type store struct {
 	defs  map[string]*definition
 	users map[string]map[string]bool // name → names that use it directly
 	count int
+
+	sources int // definitions with an uncertain input of their own
 }
 
 func newStore() store {
@@ -53,6 +56,9 @@ func (st *store) put(d *definition) {
 		d.order = st.count
 	}
 	st.defs[d.name] = d
+	if d.source {
+		st.sources++
+	}
 	for _, u := range d.uses {
 		if st.users[u] == nil {
 			st.users[u] = map[string]bool{}
@@ -62,6 +68,9 @@ func (st *store) put(d *definition) {
 }
 
 func (st *store) unlink(d *definition) {
+	if d.source {
+		st.sources--
+	}
 	for _, u := range d.uses {
 		delete(st.users[u], d.name)
 	}

@@ -53,7 +53,7 @@ func (s *Session) compute(n *program.Node) (float64, []string, error) {
 }
 
 // answer checks and computes an expression.
-func (s *Session) answer(x syntax.Expr, stated *syntax.Stated, c *program.Checker) (*Value, error) {
+func (s *Session) answer(ctx context.Context, x syntax.Expr, stated *syntax.Stated, c *program.Checker) (*Value, error) {
 	n, err := c.Check(x)
 	if err != nil {
 		return nil, err
@@ -76,15 +76,37 @@ func (s *Session) answer(x syntax.Expr, stated *syntax.Stated, c *program.Checke
 	if err != nil {
 		return nil, s.blame(err, c)
 	}
-	return s.value(v, n.Type, unit, append(c.Warnings, warnings...)), nil
+	value := s.value(v, n.Type, unit, append(c.Warnings, warnings...))
+	if err := s.addUncertainty(ctx, value, n); err != nil {
+		return nil, s.blame(err, c)
+	}
+	return value, nil
 }
 
-// declared is the unit that a bare name was defined with.
+// declared is the unit that a bare name was defined with, or that a bare call
+// is stated in.
 func (s *Session) declared(x syntax.Expr) *units.Unit {
 	if name, ok := x.(*syntax.Name); ok {
 		if d := s.store.defs[name.Name]; d != nil {
 			return d.unit
 		}
+	}
+	return s.rowUnit(x)
+}
+
+// rowUnit is the unit in which a function wants its answer stated, when the
+// expression is a call of it and nothing more.
+func (s *Session) rowUnit(x syntax.Expr) *units.Unit {
+	call, ok := x.(*syntax.Call)
+	if !ok {
+		return nil
+	}
+	f := s.rows[call.Func]
+	if f == nil || f.Result.Unit == "" {
+		return nil
+	}
+	if u, err := s.sys.Parse(f.Result.Unit); err == nil && u.Dimension() == f.Result.Dim {
+		return &u
 	}
 	return nil
 }
@@ -141,7 +163,7 @@ func (s *Session) Eval(ctx context.Context, text string) (*Value, error) {
 		return nil, s.refusal(text, syntax.Fail(syntax.Span{Start: 0, End: len(text)}, "this is no expression", "Feed takes statements")).Err
 	}
 	c := s.checker(text, "")
-	v, err := s.answer(show.X, show.Stated, c)
+	v, err := s.answer(ctx, show.X, show.Stated, c)
 	if err == nil && v == nil {
 		err = syntax.Fail(show.X.Span(), "this has no single value", "take one of it, such as mean(…)")
 	}

@@ -13,7 +13,7 @@ func (s *Session) help(j job) ([]Result, error) {
 	if lines := s.helpOn(word); lines != nil {
 		return []Result{&Text{content: lines}}, nil
 	}
-	found := s.search(word)
+	found := s.mentions(word)
 	if len(found) == 0 {
 		hint := "help lists the topics"
 		if near := s.near(word); len(near) > 0 {
@@ -129,17 +129,21 @@ func (s *Session) functionList() []string {
 }
 
 func (s *Session) functionHelp(f *program.Function) []string {
-	out := []string{f.Signature(), "  " + f.Summary}
+	lines := []string{f.Signature(), "  " + f.Summary}
 	var rows [][]string
 	for _, p := range f.Params {
 		rows = append(rows, []string{"  " + p.Name, s.paramKind(f, p), p.Doc})
 	}
 	rows = append(rows, []string{"  result", s.resultKind(f), f.Result.Doc})
-	out = append(out, aligned(rows)...)
+	lines = append(lines, aligned(rows)...)
 	for _, part := range [][2]string{{"formula", f.Formula}, {"valid", f.Valid}, {"source", f.Source}, {"example", f.Example}, {"caution", f.Caution}} {
 		if part[1] != "" {
-			out = append(out, "  "+part[0]+": "+part[1])
+			lines = append(lines, "  "+part[0]+": "+part[1])
 		}
+	}
+	var out []string
+	for _, l := range lines {
+		out = append(out, folded(l)...)
 	}
 	return out
 }
@@ -179,6 +183,8 @@ func (s *Session) resultKind(f *program.Function) string {
 		text = "as its arguments say"
 	case f.Result.Kind == program.Point:
 		text = "a temperature"
+	case f.Result.Unit != "":
+		text = "stated in " + f.Result.Unit
 	case f.Result.Plane != "":
 		text += " at " + string(f.Result.Plane)
 	case f.Result.Follows > 0:
@@ -187,8 +193,8 @@ func (s *Session) resultKind(f *program.Function) string {
 	return text
 }
 
-// search lists what mentions a word, a line each.
-func (s *Session) search(word string) []string {
+// mentions lists what mentions a word, a line each.
+func (s *Session) mentions(word string) []string {
 	word = strings.ToLower(word)
 	var rows [][]string
 	has := func(texts ...string) bool { return strings.Contains(strings.ToLower(strings.Join(texts, " ")), word) }

@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"context"
 	"maps"
 	"path"
 	"slices"
@@ -27,7 +28,7 @@ func (s *Session) listNames(j job) ([]Result, error) {
 		} else if c.Text != "" && !ok {
 			continue
 		}
-		rows = append(rows, []string{d.name, s.short(d), remarks(d)})
+		rows = append(rows, []string{d.name, s.short(j.ctx, d), remarks(d)})
 	}
 	if len(rows) == 0 {
 		what := "nothing is defined; name = formula defines"
@@ -40,7 +41,7 @@ func (s *Session) listNames(j job) ([]Result, error) {
 }
 
 // short says what a name is, in a few words.
-func (s *Session) short(d *definition) string {
+func (s *Session) short(ctx context.Context, d *definition) string {
 	switch {
 	case d.own != nil:
 		return "function of " + strconv.Itoa(len(d.own.Params))
@@ -53,7 +54,11 @@ func (s *Session) short(d *definition) string {
 	if err != nil {
 		return "no value: " + err.Error()
 	}
-	return s.value(v, d.node.Type, d.unit, nil).Text(s.digits)
+	value := s.value(v, d.node.Type, d.unit, nil)
+	if err := s.addUncertainty(ctx, value, d.node); err != nil {
+		return "no uncertainty: " + err.Error()
+	}
+	return value.Text(s.digits)
 }
 
 // widest is how wide a text may be and still push its column.

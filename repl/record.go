@@ -20,6 +20,10 @@ type Record struct {
 	Warnings    []string
 	Error       string
 	Column      int
+	Low, High   json.Number // of a distribution, in Unit
+	Coverage    float64
+	Skewness    float64
+	Trials      int
 }
 
 // RecordKind says what a record is.
@@ -32,6 +36,7 @@ const (
 	CheckRecord
 	TableRecord
 	ErrorRecord
+	DistributionRecord
 )
 
 // Column is the head of a column: a name, and the unit of its numbers, "" for
@@ -75,6 +80,23 @@ func (r Record) MarshalJSON() ([]byte, error) {
 			Uncertainty *json.Number `json:"uncertainty"`
 			Warnings    []string     `json:"warnings"`
 		}{r.Line, r.Text, r.Value, r.Unit, r.SI, r.Dimension, r.Plane, r.Uncertainty, warnings})
+	case DistributionRecord:
+		return json.Marshal(struct {
+			Line        int          `json:"line"`
+			Text        string       `json:"text"`
+			Value       json.Number  `json:"value"`
+			Unit        string       `json:"unit"`
+			SI          float64      `json:"si"`
+			Dimension   string       `json:"dimension"`
+			Plane       string       `json:"plane"`
+			Uncertainty *json.Number `json:"uncertainty"`
+			Low         json.Number  `json:"low"`
+			High        json.Number  `json:"high"`
+			Coverage    float64      `json:"coverage"`
+			Trials      int          `json:"trials"`
+			Skewness    float64      `json:"skewness"`
+			Warnings    []string     `json:"warnings"`
+		}{r.Line, r.Text, r.Value, r.Unit, r.SI, r.Dimension, r.Plane, r.Uncertainty, r.Low, r.High, r.Coverage, r.Trials, r.Skewness, warnings})
 	case CheckRecord:
 		return json.Marshal(struct {
 			Line     int      `json:"line"`

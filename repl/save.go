@@ -2,6 +2,7 @@ package repl
 
 import (
 	"fmt"
+	"io"
 	"strings"
 
 	"example.com/dosewright/repl/internal/syntax"
@@ -36,15 +37,15 @@ func writeReply(b *strings.Builder, r *Reply) {
 
 func (s *Session) save(j job) ([]Result, error) {
 	c := j.do.(*syntax.Command)
-	if s.config.Save == nil {
+	if s.config.Create == nil {
 		return nil, &syntax.Error{Marks: []syntax.Span{c.TextAt}, Msg: "this session writes no files", Hint: "copy the transcript instead", Cause: ErrFile}
 	}
-	full, err := s.inside(c.Text)
-	if err == nil {
-		err = s.config.Save(full, s.Transcript())
-	}
+	err := s.write(syntax.String{Text: c.Text, Where: c.TextAt}, func(w io.Writer) error {
+		_, err := w.Write(s.Transcript())
+		return err
+	})
 	if err != nil {
-		return nil, &syntax.Error{Marks: []syntax.Span{c.TextAt}, Msg: err.Error(), Hint: "nothing was written; choose another name or place", Cause: err}
+		return nil, err
 	}
 	n := 0
 	for _, e := range s.entries {

@@ -3,6 +3,7 @@ package repl
 import (
 	"context"
 	"fmt"
+	"io"
 	"io/fs"
 	"slices"
 	"strings"
@@ -19,9 +20,15 @@ type Config struct {
 	Files fs.FS
 	// Dir is the folder of the session inside Files, "." by default.
 	Dir string
-	// Save writes a file of the session's folder whole or not at all; nil
-	// refuses save.
-	Save func(name string, text []byte) error
+	// Create makes a file of the session's folder, which appears whole or not at
+	// all; nil refuses save and whatever else writes.
+	Create func(name string) (File, error)
+	// Draw makes a picture file, format "svg" or "png"; nil refuses them.
+	Draw func(p *Picture, format string, w io.Writer) error
+	// Sketch draws a chart of characters, so many columns wide; nil draws none.
+	Sketch func(p *Picture, columns int) []string
+	// Progress is told how far long computations are; nil is not.
+	Progress Progress
 	// Functions of the host, beside those of the catalogue.
 	Functions []Function
 	// Version is what the program that holds the session calls itself.
@@ -31,19 +38,23 @@ type Config struct {
 // Session evaluates statements one after the other. It is not safe for
 // concurrent use; make one a goroutine.
 type Session struct {
-	config  Config
-	sys     *units.System
-	store   store
-	rows    map[string]*program.Function
-	planes  map[string][]program.Plane // by chain
-	prefer  map[units.Dimension]units.Unit
-	counted []string
-	digits  int
-	entries []entry
-	block   []string // lines of the block being typed
-	origin  origin   // where statements come from now
-	imports []imported
-	steps   int // statements run so far, those of imports included
+	config   Config
+	sys      *units.System
+	store    store
+	rows     map[string]*program.Function
+	planes   map[string][]program.Plane // by chain
+	prefer   map[units.Dimension]units.Unit
+	counted  []string
+	digits   int
+	entries  []entry
+	block    []string // lines of the block being typed
+	origin   origin   // where statements come from now
+	imports  []imported
+	pairings []pairing           // correlations of inputs
+	tables   map[string][]string // columns of each data table
+	cases    map[string]*whatIf
+	silent   bool // a replay, which writes nothing
+	steps    int  // statements run so far, those of imports included
 }
 
 // origin is the file and line of a statement; the zero value is the prompt.

@@ -21,6 +21,9 @@ func (s *Session) snapshot() Session {
 	c.planes = maps.Clone(s.planes)
 	c.prefer = maps.Clone(s.prefer)
 	c.counted = slices.Clone(s.counted)
+	c.tables = maps.Clone(s.tables)
+	c.cases = maps.Clone(s.cases)
+	c.pairings = slices.Clone(s.pairings)
 	c.imports = slices.Clone(s.imports)
 	return c
 }

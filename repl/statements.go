@@ -50,6 +50,31 @@ func statements() []statement {
 		{"import", "import \"file\"", "brings in the definitions of another session",
 			"The reply records each definition and a hash of the content, so that a replay\ntells which conventions have changed since. Paths are relative to the importing file.",
 			"", (*Session).importFile},
+		{"budget", "budget expr", "shows which input decides: the uncertainty budget of a value",
+			"First order, after JCGM 100: each uncertain input with its value x, standard\nuncertainty u(x), sensitivity c, share of u². One literal with ± is one source of\nerror, however often its name is used.",
+			"budget normal(3 W, 0.1 W) * 2", (*Session).budget},
+		{"propagate", "propagate expr : trials = 1e6, seed = 1, plot", "propagates the distributions of the inputs by trials",
+			"After JCGM 101: mean, standard uncertainty, skewness and the shortest 95 %\ncoverage interval, each with what is not yet settled. Options: trials (1e6),\nseed (1), coverage (95 %), plot, to \"file.svg\". Ctrl-C keeps what was computed.",
+			"propagate rectangular(1 nm, 2 nm) ^ 2 : trials = 1e4", (*Session).propagate},
+		{"correlation", "correlation a, b = 0.8", "states how two uncertain inputs go together",
+			"a and b are names of one uncertain literal each; 0 takes the statement back.", "", (*Session).correlation},
+		{"sweep", "sweep x = a .. b by s : expr, expr", "varies one name, or two, and shows a table",
+			"Or so many points: sweep x = 1 nm .. 9 nm 41 points log : …; a second , y = … makes\na grid. At the end plot, to \"file.csv\", to \"file.svg\" or to \"file.png\". A name that\nexists is replaced for this run; a new one is local. Columns may be stated: x [mJ].",
+			"sweep d = 10 nm .. 30 nm by 5 nm : hole_area(d), photon_count(30 mJ/cm^2, hole_area(d))", (*Session).sweep},
+		{"solve", "solve expr = expr for x in a .. b", "finds every x of a range for which two sides agree",
+			"Says what the sides are at the ends when there is none; a jump is no root.",
+			"solve photon_count(30 mJ/cm^2, hole_area(d)) = 5000 for d in 5 nm .. 50 nm", (*Session).search},
+		{"maximise", "maximise expr for x in a .. b", "finds the best places of a range, a boundary named as such", "",
+			"maximise x * (3 - x) for x in 0 .. 3", (*Session).search},
+		{"minimise", "minimise expr for x in a .. b", "finds the least places of a range, a boundary named as such", "",
+			"minimise (x - 1)^2 for x in 0 .. 3", (*Session).search},
+		{"data", "data NAME = \"file.csv\"", "reads a table: columns as lists NAME.column",
+			"Heads are in the form of the SI: dose / (mJ/cm^2).", "", (*Session).data},
+		{"fit", "fit expr = expr over NAME for a, b", "finds names so that two sides agree over a table",
+			"Least squares over the rows of a data table, whose columns stand for themselves.\na and b are defined before, near the expected values, and become inputs with\nuncertainty and correlation.", "", (*Session).fit},
+		{"case", "case NAME : x = expr, y = expr", "names a what-if: other formulas for some names", "", "", (*Session).defineCase},
+		{"compare", "compare expr, expr : base, NAME", "shows values under several cases, with their ratio to base",
+			"base is the session as it stands.", "", (*Session).compare},
 		{"names", "names  or  names pattern", "lists what is defined; * in a pattern stands for any letters", "", "names", (*Session).listNames},
 		{"forget", "forget name", "drops a name that nothing rests on", "", "", (*Session).forget},
 		{"prefer", "prefer [mJ/cm^2]", "states answers of that dimension in this unit from now on", "", "prefer [mJ/cm^2]", (*Session).preferUnit},
@@ -78,6 +103,24 @@ func wordOf(a syntax.Action) string {
 		return "walk"
 	case *syntax.Prefer:
 		return "prefer"
+	case *syntax.Budget:
+		return "budget"
+	case *syntax.Propagate:
+		return "propagate"
+	case *syntax.Correlation:
+		return "correlation"
+	case *syntax.Sweep:
+		return "sweep"
+	case *syntax.Search:
+		return a.Word
+	case *syntax.Fit:
+		return "fit"
+	case *syntax.Case:
+		return "case"
+	case *syntax.Compare:
+		return "compare"
+	case *syntax.Data:
+		return "data"
 	case *syntax.Command:
 		return a.Word
 	}

@@ -3,6 +3,7 @@ package repl
 import (
 	"encoding/json"
 	"math"
+	"strconv"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/units"
@@ -10,12 +11,17 @@ import (
 
 // Value is an answer: a quantity in the unit in which it is stated.
 type Value struct {
-	SI       float64
-	Unit     units.Unit
-	Plane    string // "" for none
-	Point    bool   // a temperature point, in kelvin
-	Warnings []string
-	sys      *units.System
+	SI    float64
+	Unit  units.Unit
+	Plane string // "" for none
+	Point bool   // a temperature point, in kelvin
+	// U is the standard uncertainty in SI units when Uncertain is set, and DoF
+	// its effective degrees of freedom, 0 for infinitely many.
+	U         float64
+	Uncertain bool
+	DoF       float64
+	Warnings  []string
+	sys       *units.System
 }
 
 // Quantity returns the value with its dimension.
@@ -27,6 +33,9 @@ func (v *Value) Number() float64 { return v.Unit.From(v.SI) }
 // Text writes the value with its unit and plane.
 func (v *Value) Text(digits int) string {
 	s := v.sys.TextIn(v.SI, v.Unit, digits)
+	if v.Uncertain {
+		s = v.Unit.Label(units.FormatUncertain(v.Number(), v.Unit.FromDifference(v.U), digits))
+	}
 	if v.Plane != "" {
 		s += " at " + v.Plane
 	}
@@ -47,10 +56,15 @@ func warningLines(warnings []string) []Line {
 }
 
 func (v *Value) record() Record {
-	return Record{
+	r := Record{
 		Kind: ValueRecord, Value: json.Number(v.Unit.Digits(v.SI)), Unit: v.Unit.String(), SI: v.SI,
 		Dimension: v.sys.BaseText(v.Unit.Dimension()), Plane: v.Plane, Warnings: v.Warnings,
 	}
+	if v.Uncertain {
+		u := json.Number(strconv.FormatFloat(v.Unit.FromDifference(v.U), 'g', -1, 64))
+		r.Uncertainty = &u
+	}
+	return r
 }
 
 // display chooses the unit in which a value of this type is stated.

@@ -19,7 +19,7 @@ func (s *Session) walk(j job) ([]Result, error) {
 		return nil, syntax.Fail(a.ChainAt, a.Chain+" is no chain", "a chain is defined by the lines chain NAME … end; see: help chain")
 	}
 	c := s.checker(j.text, "")
-	x, err := s.single(a.X, c)
+	x, err := s.single(j.ctx, a.X, c)
 	if err != nil {
 		return nil, err
 	}

@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"context"
 	"fmt"
 	"strings"
 
@@ -23,13 +24,14 @@ func (s *Session) why(j job) ([]Result, error) {
 		}
 		return nil, e
 	}
-	t := &tree{session: s, seen: map[string]bool{}}
+	t := &tree{ctx: j.ctx, session: s, seen: map[string]bool{}}
 	t.grow(name.Name, 0)
 	return []Result{&Text{content: t.text()}}, nil
 }
 
 // tree collects the lines of a derivation.
 type tree struct {
+	ctx     context.Context
 	session *Session
 	seen    map[string]bool
 	rows    [][]string
@@ -58,7 +60,7 @@ func (t *tree) grow(name string, depth int) {
 		return
 	}
 	t.seen[name] = true
-	t.add(indent+shortened(t.session.formula(d)), t.session.worth(d), remarks(d))
+	t.add(indent+shortened(t.session.formula(d)), t.session.worth(t.ctx, d), remarks(d))
 	for _, u := range d.uses {
 		t.grow(u, depth+1)
 	}
@@ -114,7 +116,7 @@ func statementWithoutNote(text string) string {
 
 // worth is the value of a definition as text, "" for chains, functions and
 // bare literals, whose text says it.
-func (s *Session) worth(d *definition) string {
+func (s *Session) worth(ctx context.Context, d *definition) string {
 	if d.node == nil || d.bare || d.node.Type.Kind != program.Number && d.node.Type.Kind != program.Point {
 		return ""
 	}
@@ -122,7 +124,11 @@ func (s *Session) worth(d *definition) string {
 	if err != nil {
 		return "has no value: " + err.Error()
 	}
-	return "= " + s.value(v, d.node.Type, d.unit, nil).Text(s.digits)
+	value := s.value(v, d.node.Type, d.unit, nil)
+	if err := s.addUncertainty(ctx, value, d.node); err != nil {
+		return "has no uncertainty: " + err.Error()
+	}
+	return "= " + value.Text(s.digits)
 }
 
 func remarks(d *definition) string {

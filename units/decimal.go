@@ -105,7 +105,9 @@ func (d decimal) product(f factor) float64 {
 		n, _ := new(big.Int).SetString(digits, 10)
 		digits = n.Mul(n, f.num).String()
 	}
-	v, _ := strconv.ParseFloat(digits+"e"+strconv.Itoa(d.ten+f.ten), 64)
+	// The point stands first: strconv loses the size of a whole number of more
+	// than 800 digits with a negative exponent.
+	v, _ := strconv.ParseFloat("0."+digits+"e"+strconv.Itoa(len(digits)+d.ten+f.ten), 64)
 	return v
 }
 

@@ -8,7 +8,8 @@ import (
 )
 
 // Digits gives a decimal text that Read takes back to exactly si: of up to 16
-// significant digits the shortest, else 17 digits; si must be finite.
+// significant digits the shortest, else 17 digits, of which zeros at the end
+// are dropped; si must be finite.
 func (u Unit) Digits(si float64) string {
 	switch {
 	case math.IsNaN(si) || math.IsInf(si, 0):
@@ -18,17 +19,16 @@ func (u Unit) Digits(si float64) string {
 	case si == 0:
 		return "0"
 	}
-	v, n := u.From(si), 15
-	if size := math.Min(math.Abs(v), math.Abs(si)); size < subnormal {
-		n = 1
+	v, first := u.From(si), 15
+	if size := math.Abs(v); min(size, math.Abs(si)) < subnormal {
+		first = 1
 	}
-	for ; n < 17; n++ {
-		text := strconv.FormatFloat(v, 'g', n, 64)
-		if u.takesBack(text, si) {
+	for n := first; n < 17; n++ {
+		if text := strconv.FormatFloat(v, 'g', n, 64); u.takesBack(text, si) {
 			return shortest(text)
 		}
 	}
-	return u.quotient(si).Text('g', 17)
+	return shortest(u.quotient(si).Text('g', 17))
 }
 
 // shortest drops the zeros that a fixed number of digits leaves at the end.
@@ -61,7 +61,7 @@ func (u Unit) quotient(si float64) *big.Float {
 
 // celsiusRange says whether the zero of the Celsius scale matters to a kelvin
 // value.
-func celsiusRange(si float64) bool { return si > -1e17 && si < 1e17 }
+func celsiusRange(si float64) bool { return si > -1e19 && si < 1e19 }
 
 // celsius writes a kelvin value in °C with the fewest decimals that read back.
 func (u Unit) celsius(si float64) string {

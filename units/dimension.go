@@ -110,19 +110,23 @@ func negBytes(a uint64) uint64 {
 // Mul returns the dimension of a product. It fails when an exponent leaves
 // the range −21 to +21.
 func (d Dimension) Mul(e Dimension) (Dimension, error) {
-	si, large := addLanes(d.si, e.si)
-	if d.things|e.things|d.declared|e.declared == 0 {
-		if large != 0 {
-			return d.mulSlowly(e)
-		}
-		return Dimension{si: si}, nil
+	if p, ok := d.mulPlain(e); ok {
+		return p, nil
 	}
+	si, large := addLanes(d.si, e.si)
 	things, large2 := addLanes(d.things, e.things)
 	declared, large3 := addLanes(d.declared, e.declared)
 	if large|large2|large3 != 0 {
 		return d.mulSlowly(e)
 	}
 	return Dimension{si, things, declared}, nil
+}
+
+// mulPlain is Mul where no counted thing takes part and no exponent is large;
+// it is small enough to be inlined.
+func (d Dimension) mulPlain(e Dimension) (Dimension, bool) {
+	si, large := addLanes(d.si, e.si)
+	return Dimension{si: si}, large|d.things|e.things|d.declared|e.declared == 0
 }
 
 // addLanes is addBytes; large is not zero when a sum overflowed or left −64 to

@@ -53,7 +53,6 @@ amount·of·substance ~mol
 volume/time         mL/min L/min
 thermal·conductivity W/(m·K)
 heat·capacity·per·mass J/(kg·K)
-energy/length       J/m
 time/area           s/cm²
 power/length        W/m
 area·per·time       cm²/s

@@ -25,7 +25,7 @@ func (e *ParseError) Error() string {
 
 const (
 	maxUnit = 200 // bytes of a unit as typed and as printed; bounds the depth too
-	growth  = 6   // printing makes a unit longer by less than this
+	growth  = 8   // printing makes a unit longer by less than this
 	// maxMagnitude bounds the scale of a unit, so that it is a float64.
 	maxMagnitude = 300
 )

@@ -67,9 +67,12 @@ func (q Quantity) Sub(r Quantity) (Quantity, error) {
 
 // Mul returns q · r.
 func (q Quantity) Mul(r Quantity) (Quantity, error) {
-	d, err := q.dim.Mul(r.dim)
-	if err != nil {
-		return Quantity{}, err
+	d, ok := q.dim.mulPlain(r.dim)
+	if !ok {
+		var err error
+		if d, err = q.dim.Mul(r.dim); err != nil {
+			return Quantity{}, err
+		}
 	}
 	return finite(q.si*r.si, d)
 }

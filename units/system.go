@@ -21,15 +21,16 @@ type System struct {
 
 // Standard returns the System with the units of the SI, those accepted with
 // it, those of the trade, and the counted things wafer, field, die and pulse.
-var Standard = sync.OnceValue(func() *System {
+var Standard = sync.OnceValue(func() *System { return newSystem(newRows()) })
+
+func newSystem(rows []row) *System {
 	s := &System{words: map[string]*row{}}
-	list := rows()
-	for i := range list {
-		s.enter(&list[i])
+	for i := range rows {
+		s.enter(&rows[i])
 	}
 	s.habits = sync.OnceValue(func() map[Dimension]habit { return readHabits(s) })
 	return s
-})
+}
 
 func (s *System) enter(r *row) {
 	s.words[r.symbol] = r

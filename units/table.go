@@ -1,7 +1,5 @@
 package units
 
-import "sync"
-
 // row is one unit: its printed symbol, other spellings, scale and dimension,
 // whether it takes prefixes, and where the scale comes from.
 type row struct {
@@ -22,8 +20,8 @@ const (
 
 func also(words ...string) []string { return words }
 
-// rows are the units that every System knows, one row each.
-var rows = sync.OnceValue(func() []row {
+// newRows returns the units that every System knows, one row each.
+func newRows() []row {
 	amount, candela := AmountBase.Of(), LuminousBase.Of()
 	second, metre := dimDuration, dimLength
 	return []row{
@@ -91,6 +89,6 @@ var rows = sync.OnceValue(func() []row {
 		{"mirror", also("mirrors"), factor{}, Dimension{}, true, "a name for the number one"},
 		{"bilayer", also("bilayers"), factor{}, Dimension{}, true, "a name for the number one"},
 	}
-})
+}
 
 const celsius = "°C"

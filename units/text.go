@@ -62,12 +62,15 @@ func (s *System) TextIn(si float64, u Unit, digits int) string {
 	v := u.From(si)
 	if finite := !math.IsNaN(si) && !math.IsInf(si, 0); finite && (math.IsInf(v, 0) || v == 0 && si != 0 && !u.point) {
 		text := u.quotient(si).Text('e', clampDigits(digits)-1) // no float64 holds it
-		return u.Label(strings.Replace(text, "e+", "e", 1))
+		return u.Label(plainExponent(text))
 	}
 	return u.Label(FormatNumber(v, digits))
 }
 
 func clampDigits(digits int) int { return min(max(digits, 1), 17) }
+
+// plainExponent writes 1e+20 as 1e20.
+func plainExponent(text string) string { return strings.Replace(text, "e+", "e", 1) }
 
 // Label writes a number with the unit behind it: a blank between, but none
 // before the degree, minute and second of an angle (SI Brochure 5.4.3).

@@ -43,11 +43,13 @@ func compose(parts []part) (Unit, error) {
 	var sum [lastBase + 1]int
 	for _, p := range parts {
 		for b := range sum {
-			n := int(p.dim.sixth(Base(b))) * p.num
-			if n%p.den != 0 {
+			switch n := int(p.dim.sixth(Base(b))) * p.num; {
+			case n == 0: // most are
+			case n%p.den != 0:
 				return Unit{}, ErrRoot
+			default:
+				sum[b] += n / p.den
 			}
-			sum[b] += n / p.den
 		}
 		u.scale = u.scale.times(p.scale.power(p.num, p.den))
 	}

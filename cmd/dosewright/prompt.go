@@ -3,9 +3,11 @@ package main
 import (
 	"context"
 	"errors"
+	"fmt"
 	"os"
 	"path/filepath"
 	"syscall"
+	"time"
 
 	"golang.org/x/term"
 
@@ -15,16 +17,18 @@ import (
 
 // prompt runs the session that is typed or piped in.
 func prompt(ctx context.Context, std stdio) int {
-	s, err := newSession(".")
+	c, err := config(".")
 	if err != nil {
 		return std.wrong(err.Error())
 	}
-	e := &engine{session: s.Session}
+	progress := terminal.NewProgress(std.problems, os.Getenv("TERM"))
+	c.Progress = showing(progress)
+	e := &engine{session: repl.NewSession(c)}
 	err = terminal.Run(ctx, e, terminal.Options{
 		In: std.in, Out: std.screen, Err: std.problems,
 		Term: os.Getenv("TERM"), NoColor: os.Getenv("NO_COLOR") != "",
 		Greeting:    "dosewright " + version() + "; help shows the way in, quit leaves",
-		HistoryFile: historyFile(),
+		HistoryFile: historyFile(), Progress: progress,
 	})
 	var ended *terminal.Ended
 	switch {
@@ -37,6 +41,25 @@ func prompt(ctx context.Context, std stdio) int {
 		return statusFine // what a person mistyped is no failure
 	}
 	return e.status
+}
+
+// showing draws how far a computation is, with the time left, once it has
+// taken a second.
+func showing(p *terminal.Progress) repl.Progress {
+	var last int
+	var start time.Time
+	return func(_ context.Context, done, total int, unit string) {
+		if start.IsZero() || done < last {
+			start = time.Now()
+		}
+		last = done
+		gone := time.Since(start)
+		if gone < time.Second || done <= 0 {
+			return
+		}
+		left := time.Duration(float64(gone) * float64(total-done) / float64(done)).Round(time.Second)
+		p.Show(fmt.Sprintf("%d of %d %s, %s left; Ctrl-C stops", done, total, unit, left))
+	}
 }
 
 // signalled is the status that shells give to a program that a signal ended.

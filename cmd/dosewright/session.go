@@ -8,6 +8,7 @@ import (
 	"path/filepath"
 
 	"example.com/dosewright/repl"
+	"example.com/dosewright/repl/chart"
 )
 
 // folder is a session whose files lie in one folder and below.
@@ -25,7 +26,8 @@ func config(dir string) (repl.Config, error) {
 	}
 	return repl.Config{
 		Files:   root.FS(),
-		Save:    func(name string, text []byte) error { return writeWhole(root, name, text) },
+		Create:  func(name string) (repl.File, error) { return createBeside(root, name) },
+		Draw:    chart.Draw,
 		Version: version(),
 	}, nil
 }

@@ -1,10 +1,12 @@
 package program
 
 import (
+	"errors"
 	"fmt"
 	"slices"
 
 	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
 )
 
 // apply makes the node of a call of a row that works on numbers.
@@ -35,14 +37,13 @@ func (c *Checker) apply(k *Call) (*Node, error) {
 }
 
 func (c *Checker) ruleRefused(k *Call, types []Type, err error) error {
+	if errors.Is(err, units.ErrRoot) || errors.Is(err, units.ErrExponent) {
+		return c.powerRefused(k.Tree.Where, types[0], err)
+	}
 	e := &syntax.Error{Msg: k.Func.Name + ": " + err.Error(), Hint: k.Func.Signature(), Cause: err}
-	for i, x := range k.Exprs {
-		if x == nil {
-			continue
-		}
-		e.Marks = append(e.Marks, x.Span())
-		if i == 0 && types[0].Dim.HasCounted() && k.Func.Name == "sqrt" {
-			e.Hint = "number_of(" + c.text(x.Span()) + ") drops counted things on purpose"
+	for _, x := range k.Exprs {
+		if x != nil {
+			e.Marks = append(e.Marks, x.Span())
 		}
 	}
 	if len(k.Exprs) == 0 {

@@ -206,16 +206,22 @@ func (c *Checker) rationalPower(x *syntax.Binary, a *Node, t Type, num, den int)
 	n := c.made(Node{op: opPower, args: []*Node{a}, value: float64(num) / float64(den)}, x.Where)
 	var err error
 	if n.Type.Dim, err = t.Dim.Pow(num, den); err != nil {
-		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: c.rootRefused(t.Dim, err), Hint: "number_of(x) drops counted things on purpose", Cause: err}
+		return nil, c.powerRefused(x.Span(), t, err)
 	}
 	if n.Type.Plane, err = t.Plane.power(num, den); err != nil {
-		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: "the plane " + string(t.Plane) + " has no such power: " + err.Error(), Hint: "number_of(x) drops planes on purpose", Cause: err}
+		return nil, c.powerRefused(x.Span(), t, err)
 	}
 	return n, nil
 }
 
-func (c *Checker) rootRefused(d units.Dimension, err error) string {
-	return fmt.Sprintf("%s has no such root: %v", c.quantity(d), err)
+// powerRefused refuses a power or root whose exponents are none.
+func (c *Checker) powerRefused(at syntax.Span, t Type, err error) *syntax.Error {
+	e := &syntax.Error{Marks: []syntax.Span{at}, Msg: c.describe(t) + " has no such power: " + err.Error(), Cause: err,
+		Hint: "exponents of units and planes are multiples of 1/6 from -21 to 21"}
+	if t.Dim.HasCounted() || t.Plane != "" {
+		e.Hint = "number_of(x) drops counted things and planes on purpose"
+	}
+	return e
 }
 
 func (c *Checker) at(x *syntax.At) (*Node, error) {

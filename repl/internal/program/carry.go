@@ -33,7 +33,11 @@ func (c *Checker) Transmission(ch *Chain, from, to Plane, at syntax.Span) (*Node
 func (c *Checker) Carry(n *Node, x syntax.Expr, ch *Chain, to Plane, at syntax.Span) (*Node, error) {
 	t := n.Type
 	if t.Plane == "" || len(t.Plane.exponents()) != 1 || t.Plane.exponents()[string(t.Plane)] != 6 {
-		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" stands at no single plane to be carried from", "say where it stands: "+c.text(x.Span())+" at IF")
+		hint := "say where it stands: " + c.text(x.Span()) + " at IF"
+		if t.Plane != "" {
+			hint = "carry takes what stands at one plane, such as 250 W at IF"
+		}
+		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" stands at no single plane to be carried from", hint)
 	}
 	factor, err := c.Transmission(ch, t.Plane, to, at)
 	if err != nil {

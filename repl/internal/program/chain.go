@@ -30,7 +30,7 @@ type Step struct {
 
 func (s Step) nodes() []*Node {
 	var list []*Node
-	for _, n := range []*Node{s.Crossings, s.Factor, s.X, s.Y} {
+	for _, n := range []*Node{s.Crossings, s.Factor, s.All, s.X, s.Y} {
 		if n != nil {
 			list = append(list, n)
 		}
@@ -114,7 +114,33 @@ func (c *Checker) elementStep(s Step, line syntax.BlockLine) (Step, error) {
 			return s, err
 		}
 	}
+	if !s.Shared {
+		return c.independent(s, line)
+	}
 	s.All = passing(s)
+	return s, nil
+}
+
+// independent gives each crossing an element with errors of its own: its
+// uncertain inputs are made anew for each.
+func (c *Checker) independent(s Step, line syntax.BlockLine) (Step, error) {
+	n := 1.0
+	if s.Crossings != nil {
+		fixed := false
+		if n, fixed = s.Crossings.Constant(); !fixed || n > 64 {
+			return s, syntax.Fail(line.Where, "independent elements are counted by a number up to 64", "write "+s.Label+" x4 independent: …")
+		}
+	}
+	one := s
+	one.Crossings = nil
+	s.All = passing(one)
+	for range int(n) - 1 {
+		var err error
+		if one.Factor, err = c.plain(line.Items[0]); err != nil {
+			return s, err
+		}
+		s.All = c.made(Node{op: opMul, args: []*Node{s.All, passing(one)}}, line.Items[0].Span())
+	}
 	return s, nil
 }
 

@@ -115,6 +115,18 @@ func (c *Checker) check(x syntax.Expr) (*Node, error) {
 	return nil, syntax.Fail(x.Span(), "this has no value", "see: help language")
 }
 
+// Local gives a name a type for this statement alone; whoever runs the program
+// fills it as an input.
+func (c *Checker) Local(name string, t Type) {
+	locals := map[string]*Node{name: {op: opRef, name: name, Type: t}}
+	for k, v := range c.locals {
+		if k != name {
+			locals[k] = v
+		}
+	}
+	c.locals = locals
+}
+
 func (c *Checker) warn(text string) {
 	if !slices.Contains(c.Warnings, text) {
 		c.Warnings = append(c.Warnings, text)
@@ -142,6 +154,9 @@ func (c *Checker) text(at syntax.Span) string {
 	return string(text)
 }
 
+// Said quotes an expression as it stands in the statement.
+func (c *Checker) Said(x syntax.Expr) string { return c.text(x.Span()) }
+
 // plain checks an expression that must be a number or a temperature point.
 func (c *Checker) plain(x syntax.Expr) (*Node, error) {
 	n, err := c.check(x)
@@ -153,6 +168,8 @@ func (c *Checker) plain(x syntax.Expr) (*Node, error) {
 		return n, nil
 	case List:
 		return nil, syntax.Fail(x.Span(), "a list is no single value", "take sum, mean, median, min, max or sd of it")
+	case condition:
+		return nil, syntax.Fail(x.Span(), "a condition is no value to calculate with", "if(a < b, x, y) takes one")
 	case ChainKind:
 		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" is a chain, not a value", "transmission("+c.text(x.Span())+", IF, WAFER) is its factor between two planes")
 	}

@@ -14,12 +14,20 @@ const MaxNodes = 200_000
 // Program is a compiled formula. It is never changed and may be run by many
 // goroutines at once, each with a Frame of its own.
 type Program struct {
-	node   *Node
-	root   eval
-	steps  []step
-	size   int // places in a frame
-	lazy   int // places that are computed on demand
-	Inputs []string
+	nodes   []*Node // what was asked for
+	roots   []eval
+	steps   []step
+	size    int // places in a frame
+	lazy    int // places that are computed on demand
+	Inputs  []string
+	Sources []*Node // uncertain inputs; their places follow those of Inputs
+	resolve Resolve
+}
+
+// Opening says which inputs of a program are left open, for Run to fill.
+type Opening struct {
+	Inputs  []string // names, in this order
+	Sources bool     // uncertain inputs, in the order in which they are met
 }
 
 // eval computes one value from a frame.
@@ -64,44 +72,96 @@ type Resolve func(name string) (*Node, error)
 // Compile makes a program of a checked formula. The named inputs are left
 // open: Run takes their values in this order.
 func Compile(root *Node, resolve Resolve, inputs ...string) (*Program, error) {
-	c := &compiler{resolve: resolve, info: map[*Node]*nodeInfo{}, names: map[string]*Node{}}
-	p := &Program{node: root, Inputs: inputs}
-	for i, name := range inputs {
+	return CompileAll([]*Node{root}, resolve, Opening{Inputs: inputs})
+}
+
+// CompileAll makes one program of several formulas, which share what they have
+// in common.
+func CompileAll(roots []*Node, resolve Resolve, open Opening) (*Program, error) {
+	c := &compiler{resolve: resolve, open: open, info: map[*Node]*nodeInfo{}, names: map[string]*Node{}}
+	for i, name := range open.Inputs {
 		n := &Node{op: opInput, name: name}
 		c.names[name] = n
 		c.info[n] = &nodeInfo{place: i, emitted: true}
 	}
-	c.size = len(inputs)
-	if err := c.count(root, false); err != nil {
-		return nil, err
+	for _, root := range roots {
+		if err := c.count(root, false); err != nil {
+			return nil, err
+		}
 	}
-	o := c.emit(root)
-	p.root, p.steps, p.size, p.lazy = o.eval(), c.steps, c.size, c.lazy
+	c.size = len(open.Inputs) + len(c.sources)
+	for i, n := range c.sources {
+		*c.info[n] = nodeInfo{place: len(open.Inputs) + i, emitted: true}
+	}
+	p := &Program{nodes: roots, Inputs: open.Inputs, Sources: c.sources, resolve: resolve}
+	for _, root := range roots {
+		p.roots = append(p.roots, c.emit(root).eval())
+	}
+	p.steps, p.size, p.lazy = c.steps, c.size, c.lazy
 	return p, nil
 }
+
+// Outputs is how many formulas p computes.
+func (p *Program) Outputs() int { return len(p.roots) }
 
 // NewFrame makes a frame in which p may run any number of times.
 func (p *Program) NewFrame() *Frame {
 	return &Frame{v: make([]float64, p.size), done: make([]uint64, p.lazy)}
 }
 
-// Run computes the value for the given inputs. The error is a *RunError.
+// Run computes the value for the given inputs: those of the names, then those
+// of the sources. The error is a *RunError.
 func (p *Program) Run(f *Frame, inputs ...float64) (float64, error) {
-	copy(f.v[:len(p.Inputs)], inputs)
+	if err := p.start(f, inputs); err != nil {
+		return 0, err
+	}
+	return p.value(f, 0)
+}
+
+// RunAll computes the value of each formula into out.
+func (p *Program) RunAll(f *Frame, inputs, out []float64) error {
+	if err := p.start(f, inputs); err != nil {
+		return err
+	}
+	for i := range p.roots {
+		var err error
+		if out[i], err = p.value(f, i); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// RunOne computes the value of formula k alone into out[k].
+func (p *Program) RunOne(f *Frame, inputs, out []float64, k int) error {
+	err := p.start(f, inputs)
+	if err == nil {
+		out[k], err = p.value(f, k)
+	}
+	return err
+}
+
+// start fills the inputs and computes what is shared.
+func (p *Program) start(f *Frame, inputs []float64) error {
+	copy(f.v[:len(p.Inputs)+len(p.Sources)], inputs)
 	f.err = nil
 	f.run++
 	for _, s := range p.steps {
 		f.v[s.place] = s.run(f)
 		if f.err != nil {
-			return 0, f.err
+			return f.err
 		}
 	}
-	x := p.root(f)
+	return nil
+}
+
+func (p *Program) value(f *Frame, i int) (float64, error) {
+	x := p.roots[i](f)
 	if f.err != nil {
 		return 0, f.err
 	}
 	if x-x != 0 {
-		return 0, &RunError{Node: p.node, Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
+		return 0, &RunError{Node: p.nodes[i], Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
 	}
 	return x, nil
 }
@@ -118,6 +178,8 @@ type nodeInfo struct {
 
 type compiler struct {
 	resolve Resolve
+	open    Opening
+	sources []*Node
 	info    map[*Node]*nodeInfo
 	names   map[string]*Node
 	steps   []step
@@ -155,6 +217,9 @@ func (c *compiler) count(n *Node, branch bool) error {
 		}
 		i = &nodeInfo{place: -1}
 		c.info[n] = i
+		if n.op == opSource && c.open.Sources {
+			c.sources = append(c.sources, n)
+		}
 	}
 	i.parents++
 	if i.parents > 1 && (i.always || branch) {
@@ -171,11 +236,14 @@ func (c *compiler) count(n *Node, branch bool) error {
 
 // operand is a compiled node: a constant, a place, or a closure.
 type operand struct {
-	run   eval
-	place int // −1 when it has none
-	value float64
-	fixed bool
+	run     eval
+	place   int // −1 when it has none
+	value   float64
+	fixed   bool
+	product []int // places that the closure multiplies
 }
+
+func closed(run eval) operand { return operand{run: run, place: -1} }
 
 func (o operand) eval() eval {
 	switch {
@@ -192,7 +260,7 @@ func (o operand) eval() eval {
 func (c *compiler) emit(n *Node) operand {
 	n, err := c.of(n)
 	if err != nil {
-		return operand{run: fails(n, err), place: -1}
+		return closed(fails(n, err))
 	}
 	i := c.info[n]
 	if i.emitted {
@@ -213,7 +281,7 @@ func (c *compiler) emit(n *Node) operand {
 		i.place = place
 		return operand{place: place}
 	}
-	i.out = operand{run: onDemand(o.run, place, c.lazy), place: -1}
+	i.out = closed(onDemand(o.run, place, c.lazy))
 	c.lazy++
 	return i.out
 }

@@ -48,6 +48,7 @@ type Result struct {
 	// Follows is the number, counted from one, of the argument whose plane the
 	// result keeps; 0 for none.
 	Follows int
+	Unit    string // in which a call that stands alone is stated; "" for the usual one
 	Doc     string
 }
 

@@ -16,10 +16,8 @@ func (c *Checker) literal(x *syntax.Literal) (*Node, error) {
 		return nil, c.nameBehind(x, err)
 	}
 	c.nameShadowed(x)
-	if x.Spread != nil || strings.Contains(x.Number, "(") {
-		return nil, syntax.Fail(x.Where, "uncertain values are not read by this version", "write the value alone: "+c.text(x.NumberAt)+" "+x.Unit)
-	}
-	v, err := unit.Read(x.Number)
+	number, concise, uncertain := units.SplitConcise(x.Number)
+	v, err := unit.Read(number)
 	if err != nil {
 		return nil, syntax.Fail(x.NumberAt, c.shorten(x.NumberAt)+": "+err.Error(), "choose a prefix or unit that brings the number closer to one")
 	}
@@ -27,7 +25,14 @@ func (c *Checker) literal(x *syntax.Literal) (*Node, error) {
 	if unit.Point() {
 		t.Kind = Point
 	}
-	return c.constant(v, t, x.Where), nil
+	if !uncertain && x.Spread == nil {
+		return c.constant(v, t, x.Where), nil
+	}
+	s, err := c.spread(x, unit, v, concise)
+	if err != nil {
+		return nil, err
+	}
+	return c.source(v, t, s, x.Where), nil
 }
 
 // shorten keeps a long number from filling the screen.

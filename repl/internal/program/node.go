@@ -19,6 +19,8 @@ type Node struct {
 	fn    *Function // of a call
 	cmp   string    // of a comparison
 	chain *Chain
+
+	spread *Spread // of an uncertain input
 }
 
 type op int
@@ -39,8 +41,9 @@ const (
 	opList
 	opText
 	opChain
-	opInput // a place that whoever runs the program fills
-	opSame  // its operand, of another type
+	opInput  // a place that whoever runs the program fills
+	opSame   // its operand, of another type
+	opSource // an uncertain input: its value, unless whoever runs the program fills it
 )
 
 // Text returns the text of a text.
@@ -57,20 +60,27 @@ func (n *Node) Constant() (float64, bool) { return n.value, n.op == opConst }
 func (n *Node) Names(yield func(name string)) { n.names(map[*Node]bool{}, yield) }
 
 func (n *Node) names(seen map[*Node]bool, yield func(string)) {
+	n.each(seen, func(n *Node) {
+		if n.op == opRef {
+			yield(n.name)
+		}
+	})
+}
+
+// each calls visit for the node and all below it, chains included, once each.
+func (n *Node) each(seen map[*Node]bool, visit func(*Node)) {
 	if seen[n] {
 		return
 	}
 	seen[n] = true
-	if n.op == opRef {
-		yield(n.name)
-	}
+	visit(n)
 	for _, a := range n.args {
-		a.names(seen, yield)
+		a.each(seen, visit)
 	}
 	if n.chain != nil {
 		for _, s := range n.chain.Steps {
 			for _, a := range s.nodes() {
-				a.names(seen, yield)
+				a.each(seen, visit)
 			}
 		}
 	}
@@ -80,6 +90,23 @@ func (n *Node) names(seen map[*Node]bool, yield func(string)) {
 func NewConstant(v units.Quantity) *Node {
 	return &Node{op: opConst, value: v.SI(), Type: Type{Dim: v.Dimension()}}
 }
+
+// NewList makes the node of a list of quantities of one dimension.
+func NewList(values []units.Quantity, points bool) *Node {
+	n := &Node{op: opList, Type: Type{Kind: List, Points: points}}
+	for _, v := range values {
+		n.Type.Dim = v.Dimension()
+		item := NewConstant(v)
+		if points {
+			item.Type.Kind = Point
+		}
+		n.args = append(n.args, item)
+	}
+	return n
+}
+
+// Item is the type of one value of a list.
+func Item(list *Node) Type { return list.Type.item() }
 
 // Items returns the nodes of a list's items.
 func Items(n *Node, resolve Resolve) []*Node {

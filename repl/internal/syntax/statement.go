@@ -102,11 +102,11 @@ func reader(word string) func(p *parser, word Token) Action {
 	case "chain":
 		return alone
 	}
-	return nil
+	return studies(word)
 }
 
 // later are words that the grammar keeps for statements of their own.
-const later = " stack material data budget propagate correlation sweep solve maximise minimise fit case compare "
+const later = " material "
 
 func isLater(word string) bool { return strings.Contains(later, " "+word+" ") }
 

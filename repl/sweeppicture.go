@@ -1,0 +1,53 @@
+package repl
+
+import (
+	"example.com/dosewright/repl/internal/syntax"
+)
+
+// picture draws one axis as curves and two as a map.
+func (w *sweeping) picture() (*Picture, error) {
+	cols := w.columns()
+	p := &Picture{X: Axis{Name: cols[0].Name, Unit: cols[0].Unit, Log: w.a.Axes[0].Log}}
+	if len(w.vs) == 2 {
+		if len(w.f.nodes) > 1 {
+			return nil, syntax.Fail(w.a.Columns[1].X.Span(), "a map shows one value over two names", "leave one expression, or vary one name")
+		}
+		p.Y = Axis{Name: cols[1].Name, Unit: cols[1].Unit, Log: w.a.Axes[1].Log}
+		p.Grid = w.grid(cols[2].head())
+		return p, nil
+	}
+	p.Y = Axis{Name: cols[1].Name, Unit: cols[1].Unit}
+	for k, name := range w.f.names {
+		if c := cols[1+k]; c.Unit != p.Y.Unit {
+			return nil, syntax.Fail(w.a.Columns[k].X.Span(), name+" is stated in "+c.Unit+", the curves before it in "+p.Y.Unit, "curves of one picture share a unit: state them alike, or draw two pictures")
+		}
+		s := Series{Name: name}
+		for _, row := range w.keep {
+			s.X = append(s.X, w.unit(0).From(row[0]))
+			s.Y = append(s.Y, w.unit(1+k).From(row[1+k]))
+		}
+		p.Lines = append(p.Lines, s)
+	}
+	if len(p.Lines) > 1 {
+		p.Y.Name = "value"
+	}
+	return p, nil
+}
+
+// grid lays the rows out; the second name varies fastest.
+func (w *sweeping) grid(head string) *Grid {
+	g := &Grid{Head: head}
+	nx, ny := w.axes[0].Len(), w.axes[1].Len()
+	for i := range nx {
+		g.X = append(g.X, w.unit(0).From(w.axes[0].At(i)))
+	}
+	for k := range ny {
+		g.Y = append(g.Y, w.unit(1).From(w.axes[1].At(k)))
+		row := make([]float64, nx)
+		for i := range nx {
+			row[i] = w.unit(2).From(w.keep[i*ny+k][2])
+		}
+		g.Z = append(g.Z, row)
+	}
+	return g
+}
