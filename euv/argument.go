@@ -13,15 +13,21 @@ type ArgumentError struct {
 	Argument string         // the argument's name, as in the doc comment and the catalogue
 	Value    units.Quantity // what was given
 	Want     string         // what it must be, as "greater than 0"
+	angle    bool           // Value is an angle and said in degrees
 }
 
 func (e *ArgumentError) Error() string {
-	return fmt.Sprintf("%s is %s; it must be %s", e.Argument, e.Value, e.Want)
+	value := e.Value.String()
+	if e.angle {
+		value = units.FormatNumber(e.Value.SI()*180/math.Pi, 5) + "°"
+	}
+	return fmt.Sprintf("%s is %s; it must be %s", e.Argument, value, e.Want)
 }
 
 // outside makes the error for an argument.
 func outside[T units.Kind](name string, v T, want string) error {
-	return &ArgumentError{Argument: name, Value: units.Of(v), Want: want}
+	_, angle := any(v).(units.Angle)
+	return &ArgumentError{Argument: name, Value: units.Of(v), Want: want, angle: angle}
 }
 
 // first returns the first error that is not nil.

@@ -19,7 +19,7 @@ func chainRows() []Function {
 				return c.Transmission(k.Args[0].Chain(), program.Plane(k.Words[1]), program.Plane(k.Words[2]), k.Tree.Where)
 			}}},
 		{&program.Function{Name: "carry", Section: section, Summary: "takes a quantity from its own plane to another",
-			Params:  []program.Param{{Name: "x", Doc: "power, energy, photon number or rate; fluence and irradiance between MASK and WAFER"}, chain, {Name: "plane", IsPlane: true}},
+			Params:  []program.Param{{Name: "x", Any: true, Doc: "power, energy, photon number or rate; fluence and irradiance between MASK and WAFER"}, chain, {Name: "plane", IsPlane: true}},
 			Result:  program.Result{Doc: "as x, at the plane"},
 			Formula: "x · transmission; per area also · Mx My from MASK to WAFER",
 			Valid:   "x stands at a plane of the chain", Source: "definition", Example: "carry(250 W at IF, pair, WAFER)",

@@ -17,12 +17,12 @@ func distributionRows() []Function {
 				return c.Distribution(shape, k)
 			}}}
 	}
-	a, b := program.Param{Name: "low", Doc: "lower limit"}, program.Param{Name: "high", Doc: "upper limit"}
+	a, b := program.Param{Name: "low", Any: true, Doc: "lower limit"}, program.Param{Name: "high", Any: true, Doc: "upper limit"}
 	return []Function{
 		row("rectangular", "an input that lies anywhere between two limits", "low < high, both numbers", "rectangular(1 nm, 2 nm)", program.Rectangular, a, b),
 		row("triangular", "an input between two limits, most likely in their middle", "low < high, both numbers", "triangular(1 nm, 2 nm)", program.Triangular, a, b),
 		row("normal", "an input with a normal distribution", "uncertainty ≥ 0, both numbers", "normal(3 W, 0.1 W)", program.Normal,
-			program.Param{Name: "mean"}, program.Param{Name: "uncertainty", Doc: "standard uncertainty"}),
+			program.Param{Name: "mean", Any: true}, program.Param{Name: "uncertainty", Any: true, Doc: "standard uncertainty"}),
 	}
 }
 

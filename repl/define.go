@@ -84,7 +84,13 @@ func (s *Session) checked(d *definition) error {
 	case *syntax.Define:
 		err = s.checkedValue(d, a, c)
 	case *syntax.Block:
-		d.node, err = c.ChainBlock(a)
+		if a.Kind == "stack" {
+			d.node, err = s.checkedStack(a, c)
+		} else {
+			d.node, err = c.ChainBlock(a)
+		}
+	case *syntax.Material:
+		d.node, err = s.checkedMaterial(a, c)
 	case *syntax.DefineFunction:
 		d.own = &program.OwnFunction{Name: a.Name, Params: a.Params, Stated: a.Stated, Body: a.X, Source: d.text}
 	}
@@ -99,7 +105,7 @@ func (s *Session) checkedValue(d *definition, a *syntax.Define, c *program.Check
 		return err
 	}
 	switch n.Type.Kind {
-	case program.Number, program.Point, program.List:
+	case program.Number, program.Point, program.List, program.BodyKind:
 	default:
 		return syntax.Fail(a.X.Span(), "a name holds a value or a list", "chains and functions have statements of their own: help chain, help function")
 	}
@@ -131,7 +137,7 @@ func bare(x syntax.Expr) bool {
 }
 
 func (s *Session) valueResults(ctx context.Context, d *definition) ([]Result, error) {
-	if d.node.Type.Kind == program.List || d.bare {
+	if k := d.node.Type.Kind; k == program.List || k == program.BodyKind || d.bare {
 		return noteOnly(d.warning), nil
 	}
 	v, err := s.valueOf(d)

@@ -66,11 +66,11 @@ func (s *Session) survives(d, old *definition, at syntax.Span) error {
 			return s.blame(err, c)
 		}
 	case program.ChainKind:
-		for _, step := range d.node.Chain().Steps {
+		for i, step := range d.node.Chain().Steps {
 			if step.All == nil {
 				continue
 			}
-			if _, _, err := s.compute(step.All); err != nil {
+			if _, _, err := s.compute(c.Factor(d.node.Chain(), i, step.Factor.At)); err != nil {
 				return s.blame(err, c)
 			}
 		}
@@ -81,7 +81,7 @@ func (s *Session) survives(d, old *definition, at syntax.Span) error {
 // dependentsKeep checks again all that rests on d and refuses when one of them
 // would change its dimension or plane, or break.
 func (s *Session) dependentsKeep(d, old *definition, at syntax.Span) error {
-	if old == nil || old.node != nil && d.node != nil && old.node.Type == d.node.Type && d.node.Type.Kind != program.ChainKind {
+	if old == nil || old.node != nil && d.node != nil && old.node.Type == d.node.Type && d.node.Type.Kind != program.ChainKind && d.node.Type.Kind != program.BodyKind {
 		return nil
 	}
 	var broken []string

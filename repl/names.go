@@ -45,6 +45,8 @@ func (s *Session) short(ctx context.Context, d *definition) string {
 	switch {
 	case d.own != nil:
 		return "function of " + strconv.Itoa(len(d.own.Params))
+	case d.node.Type.Kind == program.BodyKind:
+		return "body"
 	case d.node.Type.Kind == program.ChainKind:
 		return "chain " + planeList(d.node.Chain().Planes())
 	case d.node.Type.Kind == program.List:

@@ -38,6 +38,10 @@ func statements() []statement {
 			"energy_in(P [W], t [s]) = P * t", (*Session).defineFunction},
 		{"chain", "chain NAME … end", "defines what light meets: planes, elements, reduction", chainHelp,
 			"chain pair\n  at IF\n  mirror x2: 66 %\n  at WAFER\nend", (*Session).defineChain},
+		{"stack", "stack NAME … end", "defines a mirror or filter: layers in the order in which light meets them", stackHelp,
+			"stack std\n  cap: Ru 2.5 nm\n  bilayer x50: Si 4.15 nm, Mo 2.85 nm\n  roughness: 0.4 nm\n  substrate: Si\nend", (*Session).defineStack},
+		{"material", "material NAME = C8H8O 1.17 g/cm^3", "names a material by formula and density",
+			"Element symbols are known at the density of the solid. Materials are names of\ntheir own kind and do not meet values.", "material quartz = SiO2 2.2 g/cm^3", (*Session).defineMaterial},
 		{"counted", "counted lot", "declares a new counted thing, a dimension of its own",
 			"wafer, field, die and pulse are known from the start.", "counted lot", (*Session).declareCounted},
 		{"check", "check a >= b  or  check a = b within 2 %", "says whether a comparison holds, with both sides",
@@ -103,6 +107,8 @@ func wordOf(a syntax.Action) string {
 		return "walk"
 	case *syntax.Prefer:
 		return "prefer"
+	case *syntax.Material:
+		return "material"
 	case *syntax.Budget:
 		return "budget"
 	case *syntax.Propagate:
@@ -138,11 +144,24 @@ func (s *Session) perform(ctx context.Context, text string, st *syntax.Statement
 	return nil, syntax.Fail(syntax.Span{Start: 0, End: len(text)}, word+" is no statement", "help statements lists them")
 }
 
+const stackHelp = `Lines in the order in which light meets them:
+  cap: Ru 2.5 nm                          a layer
+  bilayer x50: Si 4.15 nm, Mo 2.85 nm     layers that repeat; x(n) for a name
+  Si 4.15 nm rough 0.6 nm                 the interface on top of that layer is rough
+  roughness: 0.4 nm                       every interface that says no other
+  substrate: Si                           without it there is vacuum below
+A thickness is any expression, so that it can be swept and solved for.
+reflectivity(NAME, 13.5 nm, 6 deg), peak_wavelength(NAME), bandwidth(NAME) ask it.`
+
 const chainHelp = `Lines in the order in which light meets them:
   at IF                          a plane
   illuminator x4: 66 %           an element, crossed four times; a factor from 0 to 1
   reduction: 4, 4                across the scan, then along it
   at WAFER
+  band: 13.5 nm, 2 %             centre and full width; without it one wavelength
+  mirror: reflectivity(std, λ)   λ is the running wavelength; the chain then takes
+                                 the mean of the product over the band
+  spectrum: f(λ)                 of the source, at the head of the chain; else flat
 transmission(NAME, IF, WAFER) is the factor between two planes, carry(x, NAME, WAFER)
 takes a power, energy, photon number or rate from its own plane to another, either
 way; fluence and irradiance go between MASK and WAFER, where the reduction gives the

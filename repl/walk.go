@@ -1,9 +1,11 @@
 package repl
 
 import (
+	"fmt"
 	"math"
 	"slices"
 
+	"example.com/dosewright/euv"
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
@@ -60,7 +62,7 @@ func (s *Session) walkFrom(ch *program.Chain, start int, x *Value, c *program.Ch
 		if st.All == nil {
 			continue
 		}
-		f, _, err := s.compute(st.All)
+		f, _, err := s.compute(c.Factor(ch, i, st.All.At))
 		if err != nil {
 			return nil, s.blame(err, c)
 		}
@@ -79,7 +81,45 @@ func (s *Session) walkFrom(ch *program.Chain, start int, x *Value, c *program.Ch
 	}
 	largest := slices.Max(behind)
 	unit := s.display(largest, program.Type{Dim: x.Unit.Dimension()})
-	return []Result{walkTable(ch, factors, behind, unit, s.quantityName(x))}, nil
+	t := walkTable(ch, factors, behind, unit, s.quantityName(x))
+	if !ch.Spectral {
+		return []Result{t}, nil
+	}
+	said, err := s.againstPeak(ch, c)
+	if err != nil {
+		return nil, s.blame(err, c)
+	}
+	return []Result{t, said}, nil
+}
+
+// againstPeak says how what a chain passes in its band differs from the product
+// at its brightest wavelength.
+func (s *Session) againstPeak(ch *program.Chain, c *program.Checker) (*Text, error) {
+	planes := ch.Planes()
+	from, to := planes[0], planes[len(planes)-1]
+	n, err := c.Spectrum(ch, from, to, syntax.Span{})
+	if err != nil {
+		return nil, err
+	}
+	whole, err := c.Transmission(ch, from, to, syntax.Span{})
+	if err != nil {
+		return nil, err
+	}
+	mean, _, err := s.compute(whole)
+	if err != nil {
+		return nil, err
+	}
+	length := program.Type{Dim: units.DimensionOf[units.Length]()}
+	peak, _, err := s.compute(brightest(c, ch, n, "", func(p euv.Peak) (float64, error) { return p.Value, nil }, program.Type{}))
+	if err != nil {
+		return &Text{content: []string{"in the band " + units.FormatNumber(mean, s.digits) + "; the product has no single brightest wavelength near it"}}, nil
+	}
+	at, _, err := s.compute(brightest(c, ch, n, "", func(p euv.Peak) (float64, error) { return float64(p.Wavelength), nil }, length))
+	if err != nil {
+		return nil, err
+	}
+	return &Text{content: []string{fmt.Sprintf("in the band %s; at the brightest wavelength, %s, %s: the band has %s %% of that",
+		units.FormatNumber(mean, s.digits), s.sys.TextIn(at, s.display(at, length), s.digits), units.FormatNumber(peak, s.digits), units.FormatNumber(100*mean/peak, 3))}}, nil
 }
 
 func (s *Session) quantityName(x *Value) string {

@@ -41,6 +41,8 @@ func TestRefusals(t *testing.T) {
 		{"m2.5", "a power is a whole number", "m^2", "2.5"}, {"m^2.5", "a power is a whole number", "m^2", "^2.5"},
 		{"m²^2", "a power is a whole number", "m^2", "²^2"}, {"m^", "a power is a whole number", "m^2", "^"},
 		{"m^(1/2", "a power is a whole number", "m^2", "^(1/2"}, {"m^+2", "a power is a whole number", "m^2", "^+2"},
+		{"m^(1/0)", "a power is a whole number", "m^2", "^(1/0"}, {"m^(1/-2)", "a power is a whole number", "m^2", "^(1/-2"},
+		{"m^(x)", "a power is a whole number", "m^2", "^("}, {"m^(0/2)", "zero leaves no unit", "leave the symbol out", "^(0"},
 		{"m^127", "a power is a whole number", "m^2", "^127"}, {"m^0", "zero leaves no unit", "leave the symbol out", "^0"},
 		{"m^22", "-21 to 21", "1/6", "m^22"}, {"m^(1/4)", "multiple of a sixth", "1/6", "m^(1/4)"}, {"F^6", "-21 to 21", "multiply", "F^6"},
 		{"Qm^11", "outside of 1e-300 to 1e300", "multiply", "Qm^11"}, {"m+2", "no plus sign", "write m^2", "+"},
@@ -70,6 +72,9 @@ func TestRefusals(t *testing.T) {
 		}
 		if !strings.Contains(bad.Msg, c.msg) || !strings.Contains(bad.Hint, c.hint) || (c.hint == "") != (bad.Hint == "") {
 			t.Errorf("%q: %q with the hint %q, want %q and %q", c.text, bad.Msg, bad.Hint, c.msg, c.hint)
+		}
+		if text := err.Error(); !strings.HasPrefix(text, bad.Msg) || !strings.HasSuffix(text, bad.Hint) {
+			t.Errorf("%q: the error reads %q", c.text, text)
 		}
 		if bad.Text != c.text || bad.Start < 0 || bad.End > len(c.text) || bad.Start > bad.End {
 			t.Errorf("%q: marks %d to %d of %q", c.text, bad.Start, bad.End, bad.Text)

@@ -37,8 +37,13 @@ func (a *adder) Feed(ctx context.Context, line string) Answer {
 		a.waiting()
 		<-ctx.Done()
 		return answer(Refusal, "stopped")
+	case "hang":
+		a.waiting()
+		select {}
 	case "fail":
 		panic("out of cheese")
+	case "draw":
+		return Answer{Chart: func(int) []string { panic("out of paint") }}
 	case "quit":
 		return Answer{Quit: true}
 	}
@@ -63,6 +68,9 @@ func sum(text string) Answer {
 func (a *adder) Abandon() { a.open = false }
 
 func (a *adder) Complete(line string, cursor int) (int, []string) {
+	if line == "fail" {
+		panic("out of cheese")
+	}
 	start := strings.LastIndexAny(line[:cursor], " (+") + 1
 	var fit []string
 	for _, word := range adderWords {

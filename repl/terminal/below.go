@@ -3,6 +3,7 @@ package terminal
 import (
 	"fmt"
 	"strings"
+	"unicode/utf8"
 
 	"github.com/chzyer/readline"
 )
@@ -52,6 +53,25 @@ func (p place) below(texts []string, paint func(text, code string) string) strin
 		fmt.Fprintf(&b, "\x1b[%dC", column)
 	}
 	return b.String()
+}
+
+// fold breaks a text at blanks into rows of at most so many characters.
+func fold(text string, width int) (rows []string) {
+	row := ""
+	for word := range strings.FieldsSeq(text) {
+		switch longer := row + " " + word; {
+		case row == "":
+			row = word
+		case utf8.RuneCountInString(longer) <= width:
+			row = longer
+		default:
+			rows, row = append(rows, row), word
+		}
+	}
+	if row != "" {
+		rows = append(rows, row)
+	}
+	return rows
 }
 
 // cut keeps a text from wrapping.

@@ -112,10 +112,8 @@ func (e *editor) hint(line edited) string {
 		return ""
 	}
 	hint := hintAt(e.engine, string(line.text), len(string(line.text[:line.at])))
-	if hint == "" {
-		return ""
-	}
-	return e.place(line).below([]string{hint}, e.replies.paint)
+	place := e.place(line)
+	return place.below(fold(hint, place.width-len(margin)-1), e.replies.paint)
 }
 
 func (e *editor) suspend() {

@@ -95,3 +95,16 @@ func TestTable(t *testing.T) {
 		}
 	}
 }
+
+func TestFold(t *testing.T) {
+	for _, c := range []struct{ text, want string }{
+		{"", ""},
+		{"λ (a)", "λ (a)"},
+		{"power(dose, area) µ", "power(dose,\narea) µ"},
+		{"a_word_that_is_too_long b c", "a_word_that_is_too_long\nb c"},
+	} {
+		if got := strings.Join(fold(c.text, 11), "\n"); got != c.want {
+			t.Errorf("%q: %q, want %q", c.text, got, c.want)
+		}
+	}
+}

@@ -12,8 +12,8 @@ type Engine interface {
 	// offset at which the word being completed starts, and the words that may
 	// replace line[start:cursor], in order.
 	Complete(line string, cursor int) (start int, candidates []string)
-	// Hint is one short line about the call being typed, such as its arguments,
-	// or "". It is asked for after each key.
+	// Hint is a short text about the call being typed, such as its arguments, or
+	// "". It is asked for after each key.
 	Hint(line string, cursor int) string
 	// Abandon forgets the block for whose end Feed waits.
 	Abandon()

@@ -87,6 +87,7 @@ func (p *plain) put(text string) error {
 
 func (p *plain) remember(string) {}
 
-func (p *plain) discard() {}
+// discard ends the line in which the terminal has shown the ^C.
+func (p *plain) discard() { _ = p.put("\n") }
 
 func (p *plain) close() { close(p.done) }

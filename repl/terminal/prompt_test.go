@@ -111,7 +111,7 @@ func TestPromptHints(t *testing.T) {
 	s.sees("dose> power(wavelength+wavelengt", "h+1)^C", "dose> power(█", "| power(wavelength)")
 	resize(t, s.user, 12)
 	s.types("1")
-	s.reads("\n\x1b[J| power(wav")
+	s.reads("\n\x1b[J| power(wav\x1b[") // cut
 	s.types("\r")
 	s.reads("is no number")
 	s.types(ctrlD)
@@ -259,6 +259,33 @@ func TestPromptIsNarrowFromTheStart(t *testing.T) {
 	}
 }
 
+// An engine that does not return keeps the program, but not the terminal.
+func TestPromptIsToldTwice(t *testing.T) {
+	s := sit(t, 80, nil)
+	s.sees("dose> █")
+	s.types("hang\r")
+	s.reads("waiting")
+	for range 2 {
+		if err := s.program.Process.Signal(syscall.SIGTERM); err != nil {
+			t.Fatal(err)
+		}
+		s.reads(askForNone)
+		s.read = 0 // once is enough for both
+	}
+	s.leaves(-int(syscall.SIGTERM))
+}
+
+// A fault gives the terminal back, or does not end the session.
+func TestPromptFaults(t *testing.T) {
+	s := sit(t, 80, nil)
+	s.sees("dose> █")
+	s.types("fail\t\r")
+	s.reads("| a fault of this program, not of the statement: out of cheese")
+	s.types("draw\r")
+	s.leaves(2)
+	s.reads("out of paint")
+}
+
 func TestPromptIsTold(t *testing.T) {
 	for _, signal := range []syscall.Signal{syscall.SIGTERM, syscall.SIGHUP, syscall.SIGQUIT} {
 		for _, typed := range []string{"", "1+1", "\x12", "open\ra", "\x1b[200~1+1", "wait\r"} {
@@ -364,7 +391,7 @@ func TestPromptOnADumbTerminal(t *testing.T) {
 	s.types("wait\n")
 	s.reads("waiting")
 	s.types(ctrlC)
-	s.reads("| stopped\r\n")
+	s.reads("\r\n| stopped\r\n")
 	s.types("1+1\n")
 	s.reads("| 2\r\n")
 	if strings.ContainsRune(s.seen, keyEscape) {

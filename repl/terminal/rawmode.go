@@ -53,8 +53,9 @@ func (m *rawMode) leave() error {
 		return nil
 	}
 	m.on = false
-	_, err := io.WriteString(m.out, askForNone)
-	return errors.Join(err, term.Restore(m.in, m.before))
+	err := term.Restore(m.in, m.before)
+	_, failed := io.WriteString(m.out, askForNone)
+	return errors.Join(err, failed)
 }
 
 // end gives it back for good.

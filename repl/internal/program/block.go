@@ -149,7 +149,7 @@ func (b *blocks) loopOf(n *Node) *lane {
 		return &lane{fixed: true}
 	}
 	for _, a := range n.args {
-		if a.Type.Kind == List || a.Type.Kind == ChainKind {
+		if a.Type.Kind == List || a.Type.Kind == ChainKind || a.Type.Kind == BodyKind {
 			b.single = true
 			return &lane{fixed: true}
 		}

@@ -172,6 +172,34 @@ func (c *Checker) argument(k *Call, i int, x syntax.Expr) error {
 	if p.IsPlane {
 		return c.planeArgument(k, i, x)
 	}
+	if p.IsWord {
+		name, ok := x.(*syntax.Name)
+		if !ok {
+			return syntax.Fail(x.Span(), p.Name+" is one word, such as H2", k.Func.Signature())
+		}
+		k.Words[i] = name.Name
+		return nil
+	}
+	if p.Either {
+		if name, ok := x.(*syntax.Name); ok && c.knownPlane(Plane(name.Name)) {
+			return c.planeArgument(k, i, x)
+		}
+	}
+	if p.Kind == EitherKind {
+		if name, ok := x.(*syntax.Name); ok {
+			if n := c.Scope.Node(name.Name); n != nil && n.Type.Kind == ChainKind {
+				c.use(name.Name)
+				k.Args[i] = n
+				return nil
+			}
+		}
+		p.Kind = BodyKind
+	}
+	if p.Kind == BodyKind {
+		var err error
+		k.Args[i], err = c.body(p, x)
+		return err
+	}
 	if name, ok := x.(*syntax.Name); ok && name.Name == none && p.Default == none {
 		return c.fallback(k, i, p)
 	}
@@ -201,14 +229,14 @@ func (c *Checker) fits(f *Function, p Param, n *Node, x syntax.Expr) error {
 	switch {
 	case p.Kind == ChainKind && t.Kind != ChainKind:
 		return syntax.Fail(x.Span(), c.text(x.Span())+" is no chain", "a chain is defined by the lines chain NAME … end; see: help chain")
-	case p.Kind == ChainKind, p.Kind == List && t.Kind == List && t.Dim == p.Dim:
+	case p.Kind == ChainKind, p.Kind == List && t.Kind == List && (p.Any || t.Dim == p.Dim):
 		return nil
 	case p.Kind == List && t.Kind != List:
 		return syntax.Fail(x.Span(), p.Name+" of "+f.Name+" is a list, not "+c.describe(t), "a list is written {1, 2, 3}")
 	case t.Kind == List || t.Kind == Text || t.Kind == ChainKind || t.Kind == condition:
 		return syntax.Fail(x.Span(), p.Name+" of "+f.Name+" is "+c.quantity(p.Dim)+", not "+c.describe(t), f.Signature())
 	}
-	if f.Build != nil && p.Dim.IsNumber() {
+	if p.Any {
 		return nil // the builder looks at the dimension itself
 	}
 	if t.Dim != p.Dim {

@@ -14,17 +14,48 @@ func (c *Checker) Transmission(ch *Chain, from, to Plane, at syntax.Span) (*Node
 	if err != nil {
 		return nil, syntax.Fail(at, err.Error(), "a chain's line at NAME makes a plane")
 	}
-	n := c.constant(1, Type{}, at)
-	for _, s := range steps {
-		if s.All != nil {
-			n = c.made(Node{op: opMul, args: []*Node{n, s.All}}, at)
-		}
-	}
+	n := c.between(ch, steps, at)
 	if against {
 		n = c.made(Node{op: opDiv, args: []*Node{c.constant(1, Type{}, at), n}}, at)
 	}
 	n.Type = Type{Plane: to.times(from, -1)}
 	return n, nil
+}
+
+// between makes the node of the factor of neighbouring steps. In a chain with
+// spectra it is the ratio of what is left in the band behind them to what was
+// left before, so that factors multiply.
+func (c *Checker) between(ch *Chain, steps []Step, at syntax.Span) *Node {
+	if !ch.Spectral || len(steps) == 0 {
+		return c.product(steps, at)
+	}
+	first := 0
+	for i := range ch.Steps {
+		if &ch.Steps[i] == &steps[0] {
+			first = i
+		}
+	}
+	behind := c.inBand(ch, ch.Steps[:first+len(steps)], at)
+	if first == 0 {
+		return behind
+	}
+	before := c.inBand(ch, ch.Steps[:first], at)
+	return c.made(Node{op: opDiv, args: []*Node{behind, before}}, at)
+}
+
+// Factor makes the node of the factor of one step of a chain, in the band.
+func (c *Checker) Factor(ch *Chain, i int, at syntax.Span) *Node {
+	return c.between(ch, ch.Steps[i:i+1], at)
+}
+
+// Peak makes the node of the product of elements between two planes at one
+// wavelength, as a function of it.
+func (c *Checker) Spectrum(ch *Chain, from, to Plane, at syntax.Span) (*Node, error) {
+	steps, _, err := ch.part(from, to)
+	if err != nil {
+		return nil, syntax.Fail(at, err.Error(), "a chain's line at NAME makes a plane")
+	}
+	return c.product(steps, at), nil
 }
 
 // Carry makes the node of a power, energy, photon number or rate taken from its

@@ -13,6 +13,10 @@ import (
 type Chain struct {
 	Name  string
 	Steps []Step
+	// Center and Width are the band, Weight the spectrum of the source or nil.
+	// Without a band the chain stands at one wavelength.
+	Center, Width, Weight *Node
+	Spectral              bool // some element depends on the wavelength
 }
 
 // Step is a plane, a reduction or an element of a chain.
@@ -25,6 +29,7 @@ type Step struct {
 	Factor    *Node // of one crossing
 	All       *Node // of all crossings, between 0 and 1 by its own check
 	X, Y      *Node // reduction, for the step of that label
+	Runs      bool  // the factor depends on the running wavelength
 	Shared    bool  // all crossings share one factor; false for independent
 }
 
@@ -40,13 +45,18 @@ func (s Step) nodes() []*Node {
 
 // ChainBlock checks the block of a chain.
 func (c *Checker) ChainBlock(b *syntax.Block) (*Node, error) {
-	ch := &Chain{Name: b.Name}
+	length := units.DimensionOf[units.Length]()
+	ch := &Chain{Name: b.Name, Center: c.constant(13.5e-9, Type{Dim: length}, b.NameAt), Width: c.constant(0, Type{Dim: length}, b.NameAt)}
+	c.running()
 	for _, line := range b.Lines {
 		step, err := c.step(ch, line)
 		if err != nil {
 			return nil, err
 		}
-		ch.Steps = append(ch.Steps, step)
+		if step.Label != "band" && step.Label != "spectrum" {
+			ch.Steps = append(ch.Steps, step)
+		}
+		ch.Spectral = ch.Spectral || step.Runs
 	}
 	if len(ch.planes()) < 2 {
 		return nil, syntax.Fail(b.NameAt, fmt.Sprintf("%s has %s; it needs two or more to lead from one to the other", b.Name, named(len(ch.planes()), "plane")),
@@ -88,8 +98,10 @@ func (c *Checker) step(ch *Chain, line syntax.BlockLine) (Step, error) {
 	switch line.Label {
 	case "reduction":
 		return c.reduction(s, line)
-	case "band", "spectrum":
-		return s, syntax.Fail(line.Where, line.Label+" belongs to chains whose elements are spectra, which this version does not read", "state each element by its factor in the band")
+	case "band":
+		return s, c.band(ch, line)
+	case "spectrum":
+		return s, c.weight(ch, line)
 	}
 	return c.elementStep(s, line)
 }
@@ -109,6 +121,7 @@ func (c *Checker) elementStep(s Step, line syntax.BlockLine) (Step, error) {
 	if v, ok := s.Factor.Constant(); ok && !(v >= 0 && v <= 1) {
 		return s, syntax.Fail(x.Span(), fmt.Sprintf("%s is %s; a factor lies between 0 and 1", s.Label, units.FormatNumber(v, 5)), "percent is written 65 %")
 	}
+	s.Runs = s.Factor.runs()
 	if line.Times != nil {
 		if s.Crossings, err = c.crossings(line); err != nil {
 			return s, err

@@ -21,6 +21,11 @@ type Scope interface {
 	Function(name string) *Function
 	// Own returns a function of the session, or nil.
 	Own(name string) *OwnFunction
+	// Material returns the body of a material, nil when there is none, and
+	// whether it is one of the session's own.
+	Material(name string) (n *Node, own bool)
+	// Integrate gives the mean of a spectrum over a band.
+	Integrate(f func(dst, wavelengths []float64) error, center, width float64, kinks []float64) (mean, deviation float64, err error)
 	// Planes lists the planes that chains declare.
 	Planes() []Plane
 	// Near returns known names and functions that are spelled like the word.
@@ -111,6 +116,8 @@ func (c *Checker) check(x syntax.Expr) (*Node, error) {
 		return c.list(x)
 	case *syntax.Call:
 		return c.call(x)
+	case *syntax.Layer:
+		return nil, syntax.Fail(x.Where, "a layer stands in a stack", "a product is written with *, and a unit stands right behind its number")
 	}
 	return nil, syntax.Fail(x.Span(), "this has no value", "see: help language")
 }
@@ -173,6 +180,9 @@ func (c *Checker) plain(x syntax.Expr) (*Node, error) {
 	case ChainKind:
 		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" is a chain, not a value", "transmission("+c.text(x.Span())+", IF, WAFER) is its factor between two planes")
 	}
+	if n.Type.Kind == BodyKind {
+		return nil, syntax.Fail(x.Span(), c.text(x.Span())+" is a body, not a value", "reflectivity("+c.text(x.Span())+", 13.5 nm) is one; see: help reflectivity")
+	}
 	return nil, syntax.Fail(x.Span(), c.describe(n.Type)+" is no value to calculate with", "texts name files and labels only")
 }
 
@@ -185,7 +195,7 @@ func (c *Checker) name(x *syntax.Name) (*Node, error) {
 	}
 	if n := c.Scope.Node(x.Name); n != nil {
 		c.use(x.Name)
-		if n.op == opChain {
+		if n.op == opChain || n.op == opBody {
 			return n, nil
 		}
 		return c.made(Node{op: opRef, name: x.Name, Type: n.Type}, x.Where), nil

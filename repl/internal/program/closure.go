@@ -24,6 +24,8 @@ func (c *compiler) closure(n *Node) operand {
 		return closed(c.branch(n))
 	case opCall:
 		return closed(c.callOf(n))
+	case opSpectral:
+		return closed(c.spectral(n))
 	}
 	return closed(fails(n, fmt.Errorf("this is no single value")))
 }

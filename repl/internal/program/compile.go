@@ -45,6 +45,7 @@ type Frame struct {
 	done     []uint64 // run in which a place computed on demand was computed
 	run      uint64
 	err      error
+	nested   []*nestedBlock // of in-band factors
 	Warnings []string
 }
 
@@ -186,6 +187,8 @@ type compiler struct {
 	size    int
 	lazy    int
 	nodes   int
+	nested  int
+	subs    []*Program
 }
 
 // of follows references to the node that has the value.
@@ -226,8 +229,42 @@ func (c *compiler) count(n *Node, branch bool) error {
 		return nil
 	}
 	i.always = i.always || !branch
+	if n.op == opSpectral {
+		if err := c.collect(n.inner, map[*Node]bool{}); err != nil {
+			return err
+		}
+	}
 	for k, a := range n.args {
 		if err := c.count(a, branch || n.op == opIf && k > 0); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// collect finds the uncertain inputs of formulas that become programs of their
+// own, so that they are open in the outer one too.
+func (c *compiler) collect(list []*Node, seen map[*Node]bool) error {
+	for _, n := range list {
+		if n.op == opRef && n.name == Running {
+			continue
+		}
+		n, err := c.of(n)
+		if err != nil {
+			return err
+		}
+		if seen[n] {
+			continue
+		}
+		seen[n] = true
+		if n.op == opSource && c.open.Sources && c.info[n] == nil {
+			c.info[n] = &nodeInfo{place: -1}
+			c.sources = append(c.sources, n)
+		}
+		if err := c.collect(n.args, seen); err != nil {
+			return err
+		}
+		if err := c.collect(n.inner, seen); err != nil {
 			return err
 		}
 	}

@@ -26,6 +26,11 @@ type Function struct {
 	Build func(c *Checker, call *Call) (*Node, error)
 	// Call computes the result, with warnings, from arguments in SI units.
 	Call func(args []float64) (float64, []string, error)
+	// Spectral makes a function that computes results for many values of the
+	// first argument at once; nil for functions that gain nothing by it.
+	Spectral func() func(first, others, out []float64) error
+	// Kinks lists first arguments, between two, at which the result has a kink.
+	Kinks func(low, high float64) []float64
 }
 
 // Param is one parameter of a Function.
@@ -37,6 +42,9 @@ type Param struct {
 	Plane   Plane    // the plane that the argument must not contradict
 	Words   []string // the words it takes, for arguments that list words
 	IsPlane bool     // takes the name of a plane
+	Any     bool     // takes any dimension; the row's Build looks at it
+	Either  bool     // takes a plane in the place of a quantity
+	IsWord  bool     // takes a word that is kept as it stands, such as a formula
 	Default string   // as the language writes it; "" for none
 }
 

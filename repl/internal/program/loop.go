@@ -165,7 +165,15 @@ func raise(to, x *lane, p float64) func(int) bool {
 // callLanes calls a function of the catalogue lane by lane.
 func callLanes(f *Function, to *lane, args []*lane) func(int) bool {
 	x := make([]float64, len(args))
+	var many func(first, others, out []float64) error
+	if f.Spectral != nil {
+		many = f.Spectral()
+	}
 	return func(n int) bool {
+		if many != nil && uniform(args[1:], x[1:], n) {
+			out := to.row[:n]
+			return many(args[0].rows(n), x[1:], out) == nil && allFinite(out)
+		}
 		for i := range n {
 			for k, a := range args {
 				if a.fixed {
@@ -182,4 +190,33 @@ func callLanes(f *Function, to *lane, args []*lane) func(int) bool {
 		}
 		return true
 	}
+}
+
+// uniform says whether each lane holds one number, and copies those.
+func uniform(lanes []*lane, to []float64, n int) bool {
+	for k, l := range lanes {
+		if l.fixed {
+			to[k] = l.value
+			continue
+		}
+		to[k] = l.row[0]
+		for _, v := range l.row[1:n] {
+			if v != to[k] {
+				return false
+			}
+		}
+		if to[k]-to[k] != 0 {
+			return false
+		}
+	}
+	return true
+}
+
+func allFinite(row []float64) bool {
+	for _, v := range row {
+		if v-v != 0 {
+			return false
+		}
+	}
+	return true
 }

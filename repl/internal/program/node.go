@@ -21,6 +21,10 @@ type Node struct {
 	chain *Chain
 
 	spread *Spread // of an uncertain input
+
+	body     Body      // of a body
+	spectral *spectral // of an in-band factor
+	inner    []*Node   // formulas of a program of its own, over the running wavelength
 }
 
 type op int
@@ -41,9 +45,11 @@ const (
 	opList
 	opText
 	opChain
-	opInput  // a place that whoever runs the program fills
-	opSame   // its operand, of another type
-	opSource // an uncertain input: its value, unless whoever runs the program fills it
+	opInput    // a place that whoever runs the program fills
+	opSame     // its operand, of another type
+	opBody     // its numbers are its operands
+	opSpectral // an in-band factor of a chain
+	opSource   // an uncertain input: its value, unless whoever runs the program fills it
 )
 
 // Text returns the text of a text.
@@ -75,6 +81,9 @@ func (n *Node) each(seen map[*Node]bool, visit func(*Node)) {
 	seen[n] = true
 	visit(n)
 	for _, a := range n.args {
+		a.each(seen, visit)
+	}
+	for _, a := range n.inner {
 		a.each(seen, visit)
 	}
 	if n.chain != nil {

@@ -16,7 +16,9 @@ const (
 	List        // numbers of one dimension
 	Text
 	ChainKind
-	condition // inside if only
+	BodyKind   // a stack, a material, a film or a gas
+	EitherKind // of a parameter: a body or a chain
+	condition  // inside if only
 )
 
 // Type is all that checking knows of a value.
@@ -48,6 +50,8 @@ func (c *Checker) describe(t Type) string {
 		return "a text"
 	case ChainKind:
 		return "a chain"
+	case BodyKind:
+		return "a body"
 	case List:
 		return "a list of " + strings.Replace(c.describe(t.item()), "a temperature point", "temperature points", 1)
 	case Point:

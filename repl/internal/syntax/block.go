@@ -10,7 +10,7 @@ const MaxBlockLines = 2000
 
 // Block is a heading, lines and end. Spans are those of the whole text.
 type Block struct {
-	Kind   string // "chain"
+	Kind   string // "chain" or "stack"
 	Name   string
 	NameAt Span
 	Lines  []BlockLine
@@ -34,7 +34,7 @@ type BlockLine struct {
 func BlockHeading(line string) (kind string, ok bool) {
 	line, _, _ = strings.Cut(line, "\n")
 	words := strings.Fields(line)
-	if len(words) < 2 || words[0] != "chain" || words[1] == "=" {
+	if len(words) < 2 || words[0] != "chain" && words[0] != "stack" || words[1] == "=" {
 		return "", false
 	}
 	return words[0], true
@@ -103,7 +103,7 @@ func (p *parser) element(b *BlockLine) {
 	b.Independent = p.acceptWord("independent")
 	p.expect(":", "behind the label")
 	for p.err == nil {
-		b.Items = append(b.Items, p.expression())
+		b.Items = append(b.Items, p.item())
 		if !p.accept(",") {
 			return
 		}

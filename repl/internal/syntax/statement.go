@@ -99,20 +99,17 @@ func reader(word string) func(p *parser, word Token) Action {
 		return readPrefer
 	case "digits":
 		return readDigits
-	case "chain":
+	case "chain", "stack":
 		return alone
+	case "material":
+		return readMaterial
 	}
 	return studies(word)
 }
 
-// later are words that the grammar keeps for statements of their own.
-const later = " material "
-
-func isLater(word string) bool { return strings.Contains(later, " "+word+" ") }
-
 // StatementWord says whether a word begins a statement.
 func StatementWord(word string) bool {
-	return reader(word) != nil || isLater(word)
+	return reader(word) != nil
 }
 
 // Parse reads one statement: a line, or the lines of a block.

@@ -309,3 +309,43 @@ func readData(p *parser, _ Token) Action {
 	p.advance(false)
 	return a
 }
+
+// studied gives the names and expressions that such a statement rests on.
+func studied(a Action) (names []string, parts []Expr) {
+	columns := func(list ...Column) {
+		for _, c := range list {
+			parts = append(parts, c.X)
+		}
+	}
+	axes := func(list ...Axis) {
+		for _, x := range list {
+			parts = append(parts, x.From, x.To, x.By, x.Points)
+		}
+	}
+	switch a := a.(type) {
+	case *Budget:
+		columns(a.Of)
+	case *Propagate:
+		columns(a.Of)
+	case *Correlation:
+		names = append(names, a.A.Name, a.B.Name)
+	case *Sweep:
+		columns(a.Columns...)
+		axes(a.Axes...)
+	case *Search:
+		parts = append(parts, a.X, a.Y)
+		axes(a.Axis)
+	case *Fit:
+		parts, names = append(parts, a.X, a.Y), append(names, a.Data.Name)
+	case *Case:
+		for _, s := range a.Sets {
+			names, parts = append(names, s.Name), append(parts, s.X)
+		}
+	case *Compare:
+		columns(a.Columns...)
+		for _, c := range a.Cases {
+			names = append(names, c.Name)
+		}
+	}
+	return names, parts
+}

@@ -149,6 +149,11 @@ func Each(x Expr, f func(Expr)) {
 		for _, a := range x.Args {
 			Each(a.X, f)
 		}
+	case *Layer:
+		Each(x.X, f)
+		if x.Rough != nil {
+			Each(x.Rough, f)
+		}
 	}
 }
 
@@ -175,6 +180,8 @@ func Names(a Action) []string {
 		add(a.X)
 	case *Define:
 		add(a.X)
+	case *Material:
+		add(a.X)
 	case *DefineFunction:
 		add(a.X)
 	case *Check:
@@ -191,6 +198,10 @@ func Names(a Action) []string {
 			add(l.Times)
 			add(l.Items...)
 		}
+	default:
+		names, parts := studied(a)
+		list = append(list, names...)
+		add(parts...)
 	}
 	return list
 }

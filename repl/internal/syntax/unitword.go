@@ -76,6 +76,8 @@ func (s *scanner) unitRest(start, open int) Token {
 				s.pos++
 			}
 			s.symbol()
+		case r == ' ' && open > 0 && s.letterOrMark(s.pos+1):
+			s.pos++ // W/(m K): whoever knows units says how to write it
 		case r == ')' && open > 0:
 			open--
 			s.pos++
