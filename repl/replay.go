@@ -32,7 +32,12 @@ type Drift struct {
 
 // Change is a definition as it was recorded and as it is now; one of the two
 // is "" for a definition that came or went.
-type Change struct{ Name, Was, Now string }
+type Change struct {
+	Name, Was, Now string
+	// Alone is by how much this change by itself moves a reply, "" when that is
+	// not one number.
+	Alone string
+}
 
 // Remark is a line of the file with what is to be said of it.
 type Remark struct {
@@ -99,7 +104,7 @@ func (p *player) play(ctx context.Context, l said) {
 		rec.Line = l.number
 		p.out.Records = append(p.out.Records, rec)
 	}
-	p.judge(l, r)
+	p.judge(ctx, l, r)
 }
 
 func (p *player) record(lines []string) {
@@ -109,7 +114,7 @@ func (p *player) record(lines []string) {
 }
 
 // judge compares a reply with the record.
-func (p *player) judge(l said, r *Reply) {
+func (p *player) judge(ctx context.Context, l said, r *Reply) {
 	if r.Failed {
 		p.out.Failed = append(p.out.Failed, Remark{l.number, joinLines(r.Lines())})
 	}
@@ -131,6 +136,7 @@ func (p *player) judge(l said, r *Reply) {
 		p.changed(l.recorded, im)
 	}
 	d.MovedBy = p.movedBy(r.Text)
+	p.effects(ctx, r.Text, &d)
 	p.out.Drifts = append(p.out.Drifts, d)
 	p.moves(r.Text, d)
 }
@@ -172,13 +178,13 @@ func (p *player) changed(recorded []string, im *Imported) {
 		name := definedName(d)
 		now[name] = d
 		if syntax.Visible(d) != was[name] {
-			p.out.Changed = append(p.out.Changed, Change{name, was[name], d})
+			p.out.Changed = append(p.out.Changed, Change{Name: name, Was: was[name], Now: d})
 		}
 	}
 	for _, line := range recorded {
 		d, ok := strings.CutPrefix(line, "  ")
 		if name := definedName(d); ok && now[name] == "" {
-			p.out.Changed = append(p.out.Changed, Change{name, d, ""})
+			p.out.Changed = append(p.out.Changed, Change{Name: name, Was: d})
 		}
 	}
 }
@@ -217,7 +223,7 @@ func (p *player) moves(text string, d Drift) {
 		return
 	}
 	if def, ok := st.Do.(*syntax.Define); ok {
-		p.out.Changed = append(p.out.Changed, Change{def.Name, def.Name + " " + strings.Join(d.Was, " "), def.Name + " " + strings.Join(d.Now, " ")})
+		p.out.Changed = append(p.out.Changed, Change{Name: def.Name, Was: def.Name + " " + strings.Join(d.Was, " "), Now: def.Name + " " + strings.Join(d.Now, " ")})
 	}
 }
 

@@ -84,5 +84,9 @@ func (c Change) text() string {
 	if head, _, ok := strings.Cut(c.Now, "= "); ok {
 		was = strings.TrimPrefix(was, head+"= ")
 	}
-	return c.Now + "  (was " + was + ")"
+	text := c.Now + "  (was " + was + ")"
+	if c.Alone != "" {
+		text += "; alone " + c.Alone
+	}
+	return text
 }

@@ -28,4 +28,12 @@ func (s *Session) snapshot() Session {
 	return c
 }
 
+// Clone returns a session of the same state, which goes its own way.
+func (s *Session) Clone() *Session {
+	c := s.snapshot()
+	c.entries = slices.Clip(s.entries)
+	c.block = slices.Clone(s.block)
+	return &c
+}
+
 func (s *Session) restore(before Session) { *s = before }

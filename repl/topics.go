@@ -18,6 +18,9 @@ func topics() []topic {
 		{"units", "how units are written, and which are known", unitsPage + knownUnits()},
 		{"planes", "where a quantity stands, and how it is carried", planesPage},
 		{"counting", "wafers, fields, pulses: counted things are dimensions", countingPage},
+		{"start", "a tour of five minutes, of real statements", startPage},
+		{"uncertainty", "± literals, budgets, distributions", uncertaintyPage},
+		{"exploring", "sweeps, roots, optima, cases, fits", exploringPage},
 		{"temperatures", "points and differences", temperaturesPage},
 		{"files", "session files, import, save, replay", filesPage},
 		{"keys", "the keys at the prompt", keysPage},
@@ -73,6 +76,47 @@ wafer, field, die and pulse are dimensions: 96 field/wafer, 150 wafer/h, 50 kpul
 150 wafer/h does not add to 96 field/h, and 5 mJ/pulse * 50 kHz is no power.
 counted lot   declares another. number_of(x) drops counted things and planes on purpose.
 photon, electron, mirror and bilayer are names for the number one.
+`
+
+const startPage = `
+Type these lines one after the other; each works as it stands.
+  photon_energy(13.5 nm)                    a function; the answer comes in the trade's unit
+  dose = 30 mJ/cm^2 at WAFER                a name, and the plane at which it stands
+  photon_count(dose, hole_area(20 nm))      how many photons make a hole
+  1 / sqrt(number_of(photon_count(dose, hole_area(20 nm)))) [%]   and how they scatter
+  T = 0.9 % at WAFER/IF                     what the mirrors leave
+  P = 250 W at IF
+  P + 2 W at WAFER                          refused: the message says why, and a way on
+  P * T                                     this is at the wafer
+  wph = throughput(dose, 96 field/wafer, 8.58 cm^2/field, P * T, 9.5 s/wafer)
+  dose = 40 mJ/cm^2 at WAFER                change an input …
+  wph                                       … and what rests on it has followed
+  why wph                                   what it rests on
+  solve wph = 120 wafer/h for P in 100 W at IF .. 600 W at IF
+  dose = 30 mJ/cm^2 ± 3 % at WAFER          a value with its uncertainty
+  wph
+  budget wph                                which input decides
+  save "first.budget"                       all of this, as a file that replays
+`
+
+const uncertaintyPage = `
+13.50(2) nm, 30 mJ/cm^2 ± 2 %, 30 mJ/cm^2 ± 0.6 mJ/cm^2, (66.0 ± 0.5) % are values with
+a standard uncertainty; (k=2), (p=95 %), (nu=4) behind say more. A percentage behind ±
+is of the value. rectangular(a, b), triangular(a, b), normal(m, u) are distributions.
+Each literal is one source of error, owned by the name it stands in: x - x is 0(0).
+  budget expr          first order, after JCGM 100: which input decides
+  propagate expr       by trials, after JCGM 101: mean, interval, histogram
+  correlation a, b = 0.8
+Answers show the concise form with two digits of the uncertainty: 30.00(60) mJ/cm².
+`
+
+const exploringPage = `
+  sweep d = 10 nm .. 30 nm by 5 nm : hole_area(d)      a table; plot, to "file.csv"
+  solve a = b for x in 1 W .. 9 W                      every x for which they agree
+  maximise expr for x in a .. b, minimise expr …       the best places
+  case low : P = 200 W at IF     then     compare wph : base, low
+  data r = "rates.csv"           then     fit r.y = a * r.x + b over r for a, b
+A name that exists is replaced for that run; a new one is local to the statement.
 `
 
 const temperaturesPage = `

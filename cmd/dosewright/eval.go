@@ -5,6 +5,7 @@ import (
 	"context"
 	"encoding/json"
 	"fmt"
+	"path/filepath"
 	"strings"
 
 	"example.com/dosewright/repl"
@@ -30,7 +31,11 @@ func eval(ctx context.Context, args []string, std stdio) int {
 	if len(args) == 0 {
 		return std.wrong("eval needs a statement: dosewright eval 'photon_energy(13.5 nm)'")
 	}
-	s, err := newSession(".")
+	dir := "."
+	if len(imports) > 0 {
+		dir = filepath.Dir(imports[0])
+	}
+	s, err := newSession(dir)
 	if err != nil {
 		return std.wrong(err.Error())
 	}

@@ -98,6 +98,11 @@ func (e *engine) Feed(ctx context.Context, line string) terminal.Answer {
 	case r.Failed:
 		e.status = max(e.status, statusMoved)
 	}
+	return answerOf(r)
+}
+
+// answerOf is a reply as the terminal prints it.
+func answerOf(r *repl.Reply) terminal.Answer {
 	a := terminal.Answer{More: r.More, Quit: r.Quit}
 	for _, l := range r.Lines() {
 		a.Lines = append(a.Lines, terminal.Line{Text: l.Text, Kind: kinds[l.Tone]})

@@ -12,15 +12,19 @@ import (
 
 // replay runs session files again and compares their replies.
 func replay(ctx context.Context, args []string, std stdio) int {
-	asJSON, update := false, false
+	asJSON, update, stepped, outside := false, false, false, false
 	for len(args) > 0 && strings.HasPrefix(args[0], "--") {
 		switch args[0] {
 		case "--json":
 			asJSON = true
 		case "--update":
 			update = true
+		case "--step":
+			stepped = true
+		case "--outside":
+			outside = true
 		default:
-			return std.wrong(args[0] + " is no option of replay; they are --json and --update")
+			return std.wrong(args[0] + " is no option of replay; they are --json, --step, --update and --outside")
 		}
 		args = args[1:]
 	}
@@ -29,17 +33,20 @@ func replay(ctx context.Context, args []string, std stdio) int {
 	}
 	status := statusFine
 	for _, name := range args {
-		status = max(status, replayOne(ctx, name, asJSON, update, std))
+		c, base, err := configFor(name, outside)
+		if err != nil {
+			return std.wrong(err.Error())
+		}
+		if stepped {
+			status = max(status, step(ctx, c, base, std))
+			continue
+		}
+		status = max(status, replayOne(ctx, c, name, base, asJSON, update, std))
 	}
 	return status
 }
 
-func replayOne(ctx context.Context, name string, asJSON, update bool, std stdio) int {
-	dir, base := filepath.Split(name)
-	c, err := config(filepath.Clean(dir))
-	if err != nil {
-		return std.wrong(err.Error())
-	}
+func replayOne(ctx context.Context, c repl.Config, name, base string, asJSON, update bool, std stdio) int {
 	r, err := repl.Replay(ctx, c, base)
 	if err != nil {
 		return std.wrong(err.Error())
@@ -52,7 +59,7 @@ func replayOne(ctx context.Context, name string, asJSON, update bool, std stdio)
 		}
 	}
 	if update {
-		return rewrite(dir, base, r, asJSON, std)
+		return rewrite(name, r, asJSON, std)
 	}
 	switch {
 	case len(r.Refused) > 0:
@@ -64,7 +71,8 @@ func replayOne(ctx context.Context, name string, asJSON, update bool, std stdio)
 }
 
 // rewrite puts the replies of this run in the place of the recorded ones.
-func rewrite(dir, base string, r *repl.Replayed, asJSON bool, std stdio) int {
+func rewrite(name string, r *repl.Replayed, asJSON bool, std stdio) int {
+	dir, base := filepath.Split(name)
 	root, err := os.OpenRoot(filepath.Clean(dir))
 	if err != nil {
 		return std.wrong(err.Error())
@@ -85,14 +93,15 @@ func writeReplay(r *repl.Replayed, std stdio) {
 		writeJSON(rec, std)
 	}
 	type change struct {
-		Name string `json:"name"`
-		Was  string `json:"was"`
-		Now  string `json:"now"`
+		Name  string `json:"name"`
+		Was   string `json:"was"`
+		Now   string `json:"now"`
+		Alone string `json:"alone"`
 	}
 	for _, d := range r.Drifts {
 		moved := []change{}
 		for _, c := range d.MovedBy {
-			moved = append(moved, change(c))
+			moved = append(moved, change{c.Name, c.Was, c.Now, c.Alone})
 		}
 		writeJSON(struct {
 			Line     int      `json:"line"`

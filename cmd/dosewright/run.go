@@ -55,7 +55,7 @@ type command struct {
 func commands() []command {
 	return []command{
 		{"eval", "", "dosewright eval [--json] [--import FILE] 'statement' …", eval},
-		{"replay", "", "dosewright replay [--json] [--update] FILE …", replay},
+		{"replay", "", "dosewright replay [--json] [--step] [--update] [--outside] FILE …", replay},
 		{"help", "--help", "dosewright help [topic]", help},
 		{"version", "--version", "dosewright version", showVersion},
 	}

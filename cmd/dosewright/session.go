@@ -32,6 +32,28 @@ func config(dir string) (repl.Config, error) {
 	}, nil
 }
 
+// configFor is the configuration for a session file, and its name in there.
+// With outside, imports may lead out of the file's folder.
+func configFor(name string, outside bool) (repl.Config, string, error) {
+	dir, base := filepath.Split(name)
+	if !outside {
+		c, err := config(filepath.Clean(dir))
+		return c, base, err
+	}
+	full, err := filepath.Abs(name)
+	if err != nil {
+		return repl.Config{}, "", err
+	}
+	c, err := config(filepath.Clean(dir))
+	top := filepath.VolumeName(full) + string(filepath.Separator)
+	c.Files = os.DirFS(top)
+	inside, e := filepath.Rel(top, full)
+	if err == nil {
+		err = e
+	}
+	return c, filepath.ToSlash(inside), err
+}
+
 func newSession(dir string) (*folder, error) {
 	c, err := config(dir)
 	if err != nil {

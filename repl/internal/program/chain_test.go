@@ -142,11 +142,6 @@ chain c
 end ! 4 m: a reduction is a number greater than 0; write reduction: 4, 4
 chain c
   at IF
-  band: 13.5 nm, 2 %
-  at WAFER
-end ! band: band belongs to chains whose elements are spectra, which this version does not read; state each element by its factor in the band
-chain c
-  at IF
   mirror: {0.5, 0.6}
   at WAFER
 end ! {0.5, 0.6}: a list is no single value; take sum, mean, median, min, max or sd of it

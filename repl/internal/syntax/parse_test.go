@@ -301,6 +301,7 @@ f(a b) ! b: b is not expected here; ) is missing behind the arguments of f
 1 + ! : the end of the line is not expected here; a number, a name or a parenthesis is wanted
 * 3 ! *: * is not expected here; a number, a name or a parenthesis is wanted
 1 + * 3 ! *: * is not expected here; a number, a name or a parenthesis is wanted
+m: 0.5 ! :: : is not expected here; a line of the form label: value stands in a block, such as chain NAME … end
 a < b ! <: < compares nothing here; write check a < b, or if(a < b, x, y)
 "abc ! "abc: this text has no closing quote; texts are written "like this", on one line
 5 m [cm ! [cm: this bracket is not closed; a stated unit is written [mJ/cm^2]

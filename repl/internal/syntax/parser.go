@@ -124,6 +124,8 @@ func (p *parser) finish() {
 		p.fail(Fail(p.tok.Span, "a bracket states the unit of the whole answer and stands once, at the end", "write the unit behind its number without a bracket"))
 	case p.tok.Kind == Op && strings.Contains("< <= > >= =", text):
 		p.fail(Fail(p.tok.Span, text+" compares nothing here", "write check a "+text+" b, or if(a < b, x, y)"))
+	case p.is(":"):
+		p.fail(Fail(p.tok.Span, ": is not expected here", "a line of the form label: value stands in a block, such as chain NAME … end"))
 	case p.tok.Kind == Op && text != "(":
 		p.unexpected("a value is wanted between two signs")
 	case p.tok.Kind == Word && inGrammar(p.tok.Text):

@@ -164,11 +164,7 @@ func (p *parser) worded(word Token) Action {
 		p.declares(word)
 		return poisonAction
 	}
-	if read := reader(word.Text); read != nil {
-		return read(p, word)
-	}
-	p.fail(Fail(word.Span, word.Text+" is kept for a statement that this version does not read", "help statements lists those that it reads"))
-	return poisonAction
+	return reader(word.Text)(p, word)
 }
 
 func (p *parser) show() Action {
