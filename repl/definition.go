@@ -155,6 +155,9 @@ func (st *store) ancestors(names []string) map[string]bool {
 
 // circle refuses a definition that would rest on itself.
 func (st *store) circle(d *definition, at syntax.Span) *syntax.Error {
+	if st.defs[d.name] == nil {
+		return nil // nothing rests on a new name yet
+	}
 	for _, u := range d.uses {
 		p := st.path(u, d.name)
 		if p == nil {

@@ -56,7 +56,7 @@ func transcript(name string, text []byte) ([]said, error) {
 	text = bytes.TrimPrefix(text, []byte("\uFEFF"))
 	var list []said
 	number := 0
-	for raw := range strings.SplitSeq(string(text), "\n") {
+	for raw := range strings.SplitSeq(strings.TrimSuffix(string(text), "\n"), "\n") {
 		number++
 		line := strings.TrimRight(raw, "\r")
 		switch {

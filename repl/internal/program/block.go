@@ -9,7 +9,7 @@ const Lanes = 512
 // fewer than all, err says why the next has none. The function has buffers of
 // its own: make one for each goroutine.
 func (p *Program) Block() func(in, out [][]float64) (int, error) {
-	b := &blocks{program: p, of: map[*Node]*lane{}, frame: p.NewFrame()}
+	b := &blocks{program: p, of: map[*Node]*lane{}, parents: map[*Node]int{}, frame: p.NewFrame()}
 	b.scratch = make([]float64, len(p.Inputs)+len(p.Sources))
 	b.values = make([]float64, len(p.roots))
 	for i, name := range p.Inputs {
@@ -20,6 +20,9 @@ func (p *Program) Block() func(in, out [][]float64) (int, error) {
 		l := &lane{slot: len(p.Inputs) + i}
 		b.inputs = append(b.inputs, l)
 		b.of[n] = l
+	}
+	for _, root := range p.nodes {
+		b.count(root)
 	}
 	for _, root := range p.nodes {
 		b.roots = append(b.roots, b.emit(root))
@@ -41,6 +44,7 @@ type blocks struct {
 	named   []string
 	inputs  []*lane
 	of      map[*Node]*lane
+	parents map[*Node]int      // how often each node stands in the formulas
 	loops   []func(n int) bool // false: some lane has no value
 	roots   []*lane
 	single  bool // something stands in the formula that runs one by one only
@@ -63,17 +67,16 @@ func (b *blocks) run(in, out [][]float64) (int, error) {
 		}
 	}
 	for k, l := range b.roots {
-		to := out[k]
+		to, sum := out[k], 0.0
 		if l.fixed {
 			for i := range to {
 				to[i] = l.value
 			}
 		} else {
-			copy(to, l.row[:n])
-		}
-		sum := 0.0
-		for _, x := range to {
-			sum += x - x
+			for i, x := range l.row[:n] {
+				to[i] = x
+				sum += x - x
+			}
 		}
 		if sum != 0 {
 			return b.oneByOne(in, out)
@@ -140,7 +143,11 @@ func (b *blocks) loopOf(n *Node) *lane {
 	switch n.op {
 	case opConst, opSource:
 		return &lane{fixed: true, value: n.value}
-	case opNeg, opAdd, opSub, opMul, opDiv, opPower, opPow, opCall:
+	case opMul:
+		return b.loop(to, multiplyAll(to, b.factors(n)))
+	case opAdd:
+		return b.loop(to, b.sum(to, n))
+	case opNeg, opSub, opDiv, opPower, opPow, opCall:
 		for _, a := range n.args {
 			args = append(args, b.emit(a))
 		}
@@ -154,7 +161,11 @@ func (b *blocks) loopOf(n *Node) *lane {
 			return &lane{fixed: true}
 		}
 	}
+	return b.loop(to, loop(n, to, args))
+}
+
+func (b *blocks) loop(to *lane, run func(n int) bool) *lane {
 	to.row = make([]float64, Lanes)
-	b.loops = append(b.loops, loop(n, to, args))
+	b.loops = append(b.loops, run)
 	return to
 }

@@ -8,12 +8,8 @@ func loop(n *Node, to *lane, args []*lane) func(int) bool {
 	switch n.op {
 	case opNeg:
 		return each(to, args[0], func(x float64) float64 { return -x })
-	case opAdd:
-		return add(to, args[0], args[1])
 	case opSub:
 		return subtract(to, args[0], args[1])
-	case opMul:
-		return multiply(to, args[0], args[1])
 	case opDiv:
 		return divideLanes(to, args[0], args[1])
 	case opPower:

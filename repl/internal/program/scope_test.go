@@ -136,7 +136,7 @@ func newDesk() *desk {
 		Build: func(c *Checker, k *Call) (*Node, error) {
 			return c.Transmission(k.Args[0].Chain(), Plane(k.Words[1]), Plane(k.Words[2]), k.Tree.Where)
 		}})
-	d.add(Function{Name: "carry", Params: []Param{{Name: "x"}, {Name: "chain", Kind: ChainKind}, {Name: "plane", IsPlane: true}},
+	d.add(Function{Name: "carry", Params: []Param{{Name: "x", Any: true}, {Name: "chain", Kind: ChainKind}, {Name: "plane", IsPlane: true}},
 		Build: func(c *Checker, k *Call) (*Node, error) {
 			return c.Carry(k.Args[0], k.Exprs[0], k.Args[1].Chain(), Plane(k.Words[2]), k.Tree.Where)
 		}})

@@ -137,7 +137,7 @@ func (c *Checker) says(at *syntax.Spread, s *Spread) error {
 		case a.Name == "nu" && v > 0 && s.DoF == 0:
 			s.DoF = v
 		default:
-			return syntax.Fail(a.Where, a.Name+" = "+a.Number+" says nothing here", "k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once")
+			return syntax.Fail(a.Where, strings.TrimSpace(a.Name+" = "+a.Number+" "+a.Unit)+" says nothing here", "k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once")
 		}
 	}
 	switch {
@@ -150,7 +150,9 @@ func (c *Checker) says(at *syntax.Spread, s *Spread) error {
 	case k == 0:
 		k = 1
 	}
-	s.U /= k
+	if s.U /= k; k-k != 0 || s.U-s.U != 0 {
+		return syntax.Fail(at.Where, "the uncertainty leaves the range of floating point", "give a coverage and degrees of freedom that measurements have")
+	}
 	return nil
 }
 

@@ -1,6 +1,9 @@
 package syntax
 
-import "strings"
+import (
+	"fmt"
+	"strings"
+)
 
 type (
 	// Material names a material by formula and density.
@@ -51,6 +54,9 @@ func readMaterial(p *parser, _ Token) Action {
 	if m.Formula == "" || p.tok.Kind == End {
 		p.unexpected("a formula and a density are wanted, as in material resist = C8H8O 1.17 g/cm^3")
 		return m
+	}
+	if n := len(m.Formula); n > MaxName {
+		p.fail(Fail(m.FormulaAt, fmt.Sprintf("this formula has %d bytes; a formula may have %d", n, MaxName), "write it with fewer groups, as in C8H8O"))
 	}
 	m.X = p.expression()
 	return m

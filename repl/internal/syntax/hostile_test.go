@@ -33,6 +33,7 @@ func TestHostileTexts(t *testing.T) {
 		{"60,000 open quotes", strings.Repeat(`"`, 60_000), "two values stand side by side"},
 		{"60,000 brackets", "x" + strings.Repeat("[", 60_000), "this bracket is not closed"},
 		{"concise forms without end", strings.Repeat("1(1 ", 15_000), "two values stand side by side"},
+		{"a formula of 60,000", "material a = " + strings.Repeat("C", 60_000) + " 1 g/cm^3", "this formula has 60000 bytes; a formula may have 128"},
 		{"60,000 NULs", strings.Repeat("\x00", 60_000), "<U+0000> is not seen on a screen and has no meaning here"},
 		{"a megabyte of note", "#" + strings.Repeat("a", 1<<20), "this line has 1048577 bytes; a line may have 65536"},
 		{"a long heading", "chain " + strings.Repeat("a", 1<<20), "this heading is too long"},
