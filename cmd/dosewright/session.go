@@ -28,6 +28,7 @@ func config(dir string) (repl.Config, error) {
 		Files:   root.FS(),
 		Create:  func(name string) (repl.File, error) { return createBeside(root, name) },
 		Draw:    chart.Draw,
+		Sketch:  chart.Sketch,
 		Version: version(),
 	}, nil
 }
