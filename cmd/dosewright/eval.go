@@ -68,7 +68,11 @@ func evalAll(ctx context.Context, s *repl.Session, args []string, asJSON bool, s
 		}
 	}
 	if s.InBlock() {
-		return std.wrong("a block has no end: its last line is the word end")
+		const why = "a block has no end: its last line is the word end"
+		if asJSON {
+			writeJSON(repl.Record{Kind: repl.ErrorRecord, Line: number, Error: why, Column: 1}, std)
+		}
+		return std.wrong(why)
 	}
 	return status
 }

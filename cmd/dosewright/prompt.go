@@ -4,6 +4,7 @@ import (
 	"context"
 	"errors"
 	"fmt"
+	"io"
 	"os"
 	"path/filepath"
 	"syscall"
@@ -28,12 +29,14 @@ func prompt(ctx context.Context, std stdio) int {
 		In: std.in, Out: std.screen, Err: std.problems,
 		Term: os.Getenv("TERM"), NoColor: os.Getenv("NO_COLOR") != "",
 		Greeting:    "dosewright " + version() + "; help shows the way in, quit leaves",
-		HistoryFile: historyFile(), Progress: progress,
+		HistoryFile: historyFile(std.in), Progress: progress,
 	})
 	var ended *terminal.Ended
 	switch {
 	case errors.As(err, &ended):
 		return signalled(ended)
+	case errors.Is(err, terminal.ErrLost):
+		return statusRefused
 	case err != nil:
 		return std.wrong(err.Error())
 	}
@@ -71,8 +74,11 @@ func signalled(ended *terminal.Ended) int {
 }
 
 // historyFile is where lines are kept from one run to the next, "" when the
-// system names no place.
-func historyFile() string {
+// system names no place or nobody types.
+func historyFile(in io.Reader) string {
+	if f, ok := in.(*os.File); !ok || !term.IsTerminal(int(f.Fd())) {
+		return ""
+	}
 	dir, err := os.UserConfigDir()
 	if err != nil {
 		return ""

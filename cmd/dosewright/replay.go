@@ -59,7 +59,11 @@ func replayOne(ctx context.Context, c repl.Config, name, base string, asJSON, up
 		}
 	}
 	if update {
-		return rewrite(name, r, asJSON, std)
+		status := rewrite(name, r, asJSON, std)
+		if len(r.Failed) > 0 {
+			status = max(status, statusMoved)
+		}
+		return status
 	}
 	switch {
 	case len(r.Refused) > 0:

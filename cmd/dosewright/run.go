@@ -43,7 +43,7 @@ func run(ctx context.Context, args []string, stdin io.Reader, stdout, stderr io.
 			return c.run(ctx, args[1:], std)
 		}
 	}
-	return std.wrong(fmt.Sprintf("%s is no command; the commands are eval, replay, help, version", args[0]))
+	return std.wrong(fmt.Sprintf("%s is no command; the commands are eval, replay, page, help, version", args[0]))
 }
 
 // command is one word of the command line.
@@ -56,6 +56,7 @@ func commands() []command {
 	return []command{
 		{"eval", "", "dosewright eval [--json] [--import FILE] 'statement' …", eval},
 		{"replay", "", "dosewright replay [--json] [--step] [--update] [--outside] FILE …", replay},
+		{"page", "", "dosewright page FILE -o FILE.html", makePage},
 		{"help", "--help", "dosewright help [topic]", help},
 		{"version", "--version", "dosewright version", showVersion},
 	}

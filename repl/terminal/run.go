@@ -22,6 +22,10 @@ var (
 	errTooLong   = errors.New("the line is too long and was left out: make several lines of it")
 )
 
+// ErrLost is what Run returns when the input was no terminal and a line of it was
+// too long and left out, which the replies say at its place.
+var ErrLost = errors.New("a line was too long and was left out")
+
 // lineReader is where lines come from: the editor or a plain stream.
 type lineReader interface {
 	// read gives the next line without its end; io.EOF, errCancelled and
@@ -106,6 +110,7 @@ type session struct {
 	printer    *printer
 	progress   *Progress
 	interrupts bool     // Ctrl-C stops an evaluation, not the process
+	lost       bool     // a line of a pipe was left out
 	block      []string // the lines of the open block
 }
 
@@ -116,9 +121,13 @@ func (s *session) loop(ctx context.Context) error {
 		case errors.Is(err, errCancelled):
 			err = s.cancel(line)
 		case errors.Is(err, errTooLong):
+			s.lost = s.lost || !s.interrupts
 			err = s.say(Refusal, err.Error())
 		case errors.Is(err, io.EOF):
-			return s.end(ctx)
+			if err = s.end(ctx); err == nil && s.lost {
+				err = ErrLost
+			}
+			return err
 		case err == nil && ctx.Err() == nil:
 			var over bool
 			if over, err = s.submit(ctx, line); over {
