@@ -11,9 +11,7 @@ func (s Stack) ReflectedAmplitude(wavelength units.Length, angle units.Angle, po
 	if err := s.check(); err != nil {
 		return 0, err
 	}
-	w, err := s.amplitudes(wavelength, angle, pol, func(w *wave, p *plan, l *light, pol Polarization) {
-		w.enter(p, l)
-		w.reflect(p, l, pol)
+	w, err := s.amplitudes(wavelength, angle, pol, func(w *wave, p *plan, _ *light) {
 		w.fold(p, 1)
 		w.up[0] /= w.down[0]
 	})
@@ -31,7 +29,10 @@ func (s Stack) TransmittedAmplitude(wavelength units.Length, angle units.Angle, 
 	if err := s.checkTransmits("transmitted amplitude"); err != nil {
 		return 0, err
 	}
-	w, err := s.amplitudes(wavelength, angle, pol, (*wave).through)
+	w, err := s.amplitudes(wavelength, angle, pol, func(w *wave, p *plan, l *light) {
+		w.halve(p, l)
+		w.through(p, 1)
+	})
 	if err != nil {
 		return 0, err
 	}
@@ -39,7 +40,7 @@ func (s Stack) TransmittedAmplitude(wavelength units.Length, angle units.Angle, 
 }
 
 // amplitudes lets one wave through a checked stack.
-func (s Stack) amplitudes(wavelength units.Length, angle units.Angle, pol Polarization, do func(*wave, *plan, *light, Polarization)) (*wave, error) {
+func (s Stack) amplitudes(wavelength units.Length, angle units.Angle, pol Polarization, do func(*wave, *plan, *light)) (*wave, error) {
 	if pol == Unpolarised && angle > 0 {
 		return nil, outside("polarization", units.Count(pol), "s or p: unpolarised light has no one amplitude")
 	}
@@ -49,10 +50,14 @@ func (s Stack) amplitudes(wavelength units.Length, angle units.Angle, pol Polari
 	}
 	e.plan.make(&s)
 	e.wave.fit(&e.plan)
-	if err := e.tabulate(); err != nil {
+	if err := e.wave.tabulate(&e.plan, &e.table, 0, 1); err != nil {
 		return nil, err
 	}
-	do(&e.wave, &e.plan, &e.light, pol)
+	e.wave.enter(&e.plan, &e.light)
+	if pol == PolarizationP {
+		e.wave.turnToP(&e.plan, &e.light)
+	}
+	do(&e.wave, &e.plan, &e.light)
 	for _, a := range []complex128{e.wave.up[0], e.wave.down[0]} {
 		if !isFinite(real(a)) || !isFinite(imag(a)) {
 			return nil, outside("amplitude", units.Ratio(real(a)), "finite: here a roughness is too large, or an index too strange")

@@ -14,7 +14,6 @@ type Evaluator struct {
 	pol   Polarization
 	plan  plan
 	wave  wave
-	index [][]Index // memory of the media's indices
 }
 
 // maxWavelengths bounds the memory of an Evaluator.
@@ -80,44 +79,27 @@ func (e *Evaluator) reflectStack(s *Stack, dst []units.Ratio) error {
 	return e.lanes(s, dst, "reflectivity", (*wave).reflectivity)
 }
 
-// lanes plans a checked stack, finds the indices of its media and takes some
-// wavelengths at a time.
+// lanes plans a checked stack and takes some wavelengths at a time through it.
 func (e *Evaluator) lanes(s *Stack, dst []units.Ratio, what string, do func(*wave, []units.Ratio, *plan, *light, Polarization)) error {
 	e.plan.make(s)
 	e.wave.fit(&e.plan)
-	if err := e.tabulate(); err != nil {
-		return err
-	}
+	e.now = e.light
 	for from := 0; from < len(dst); from += lanes {
 		to := min(from+lanes, len(dst))
-		e.now = e.light.between(from, to, e.now.index)
+		e.now.k = e.light.k[from:to]
+		if err := e.wave.tabulate(&e.plan, &e.table, from, to); err != nil {
+			return err
+		}
 		do(&e.wave, dst[from:to], &e.plan, &e.now, e.pol)
 	}
 	for i, v := range dst {
+		if v >= 0 && v <= 1 {
+			continue
+		}
 		var err error
 		if dst[i], err = clampUnit(what, v); err != nil {
 			return err
 		}
-	}
-	return nil
-}
-
-// tabulate finds the indices of the plan's media.
-func (e *Evaluator) tabulate() error {
-	n := len(e.light.k)
-	e.light.index = e.light.index[:0]
-	for i, m := range e.plan.media {
-		if i == len(e.index) {
-			e.index = append(e.index, nil)
-		}
-		if cap(e.index[i]) < n {
-			e.index[i] = make([]Index, n)
-		}
-		row := e.index[i][:n]
-		if err := m.indices(row, &e.table); err != nil {
-			return err
-		}
-		e.light.index = append(e.light.index, row)
 	}
 	return nil
 }

@@ -8,19 +8,26 @@ import "math"
 // is at most one in size. This is the recursion of L. G. Parratt, Phys. Rev.
 // 95, 359 (1954), without its divisions.
 func (w *wave) fold(p *plan, n int) {
-	for i := range n {
-		w.up[i&(lanes-1)], w.down[i&(lanes-1)] = 0, 1
-	}
-	w.above(p.bottom, n)
+	w.start(n)
 	for i := len(p.blocks) - 1; i >= 0; i-- {
 		b := &p.blocks[i]
-		steps := p.steps[b.from:b.to]
-		w.steps(steps, n)
-		if b.times > 1 {
-			w.period(steps, b.wrap, n)
-			w.power(b.times-1, n)
+		steps, left := p.steps[b.from:b.to], b.times
+		if left == 1 || b.below != b.wrap { // the last period is like no other
+			w.steps(steps, b.below, n)
+			left--
 		}
-		w.above(b.first, n)
+		if left > 0 {
+			w.period(steps, b.wrap, n)
+			w.power(left, n)
+		}
+	}
+	w.above(p.top, n)
+}
+
+// start lets light go down, and none come up.
+func (w *wave) start(n int) {
+	for i := range n {
+		w.up[i&(lanes-1)], w.down[i&(lanes-1)] = 0, 1
 	}
 }
 
@@ -42,11 +49,12 @@ func (w *wave) above(t turn, n int) {
 // at most doubles the amplitudes.
 const tidy = 32
 
-// steps carries amplitudes from the bottom of a sequence of films to its top.
-func (w *wave) steps(steps []step, n int) {
+// steps carries amplitudes from below a sequence of films to its top.
+func (w *wave) steps(steps []step, below turn, n int) {
 	for i := len(steps) - 1; i >= 0; i-- {
+		w.above(below, n)
 		multiply(w.up[:n], w.phase[steps[i].film][:n])
-		w.above(steps[i].into, n)
+		below = steps[i].into
 		if i%tidy == 0 {
 			w.tidyLight(n)
 		}

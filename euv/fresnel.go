@@ -74,21 +74,14 @@ func squareRoot(z complex128) complex128 {
 	return complex(0.5*y/im, im)
 }
 
-// squares writes n².
-func squares(dst []complex128, index []Index) {
-	for i, n := range index {
-		re := 1 - n.Delta
-		dst[i] = complex(re*re-n.Beta*n.Beta, -2*re*n.Beta)
-	}
-}
-
 // phases writes exp(−2i·k·g·d): what the reflected amplitude gains on its way
 // down and up a film of thickness d.
 func (l *light) phases(dst, g []complex128, d float64) {
 	for i, k := range l.k {
 		t := 2 * k * d
-		dst[i] = expI(t*imag(g[i]), -t*real(g[i]))
+		dst[i] = complex(t*imag(g[i]), -t*real(g[i]))
 	}
+	exponentials(dst)
 }
 
 // damps writes the Névot–Croce factor exp(−2·k²·g·h·σ²) of an interface
@@ -98,15 +91,9 @@ func (l *light) damps(dst, g, h []complex128, variance float64) {
 	for i, k := range l.k {
 		e := g[i] * h[i]
 		s := -2 * k * k * variance
-		dst[i] = expI(s*real(e), s*imag(e))
+		dst[i] = complex(s*real(e), s*imag(e))
 	}
-}
-
-// expI is exp(x + iy).
-func expI(x, y float64) complex128 {
-	sin, cos := math.Sincos(y)
-	e := math.Exp(x)
-	return complex(e*cos, e*sin)
+	exponentials(dst)
 }
 
 // divide is a/b for b of ordinary size: the built-in division guards against
@@ -123,17 +110,22 @@ func multiply(dst, by []complex128) {
 	}
 }
 
-// reflectS and reflectP write Fresnel's coefficients of a smooth interface, for
-// light that comes from the medium with normal component g (and square n²).
+// reflectS writes Fresnel's coefficient of a smooth interface for s, between
+// media with normal components g, from which the light comes, and h.
 func reflectS(dst, g, h []complex128) {
 	for i := range dst {
 		dst[i] = divide(g[i]-h[i], g[i]+h[i])
 	}
 }
 
-func reflectP(dst, g, h, nSquared, mSquared []complex128) {
+// reflectP turns the coefficients for s into those for p. With n² = g² + sin²θ
+// in every medium, that for p, (n²h − m²g)/(n²h + m²g), has the one for s as a
+// factor:
+//
+//	(g − h)/(g + h) · (gh − sin²θ)/(gh + sin²θ)
+func reflectP(dst, g, h []complex128, sinSq float64) {
 	for i := range dst {
-		a, b := nSquared[i]*h[i], mSquared[i]*g[i]
-		dst[i] = divide(a-b, a+b)
+		gh, s := g[i]*h[i], complex(sinSq, 0)
+		dst[i] *= divide(gh-s, gh+s)
 	}
 }

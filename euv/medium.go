@@ -10,8 +10,9 @@ type Medium interface {
 	Index(wavelength units.Length) (Index, error)
 	// String names the medium.
 	String() string
-	// indices writes the index at every wavelength of t to dst.
-	indices(dst []Index, t *tabulated) error
+	// indices writes the indices at the wavelengths of t to dst, beginning with
+	// number from.
+	indices(dst []Index, t *tabulated, from int) error
 	// kinks calls yield with every photon energy in eV, from low to high, at
 	// which the index as a function of wavelength has a kink.
 	kinks(low, high float64, yield func(energy float64))

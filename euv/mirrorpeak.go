@@ -48,7 +48,7 @@ func (s Stack) warningsOf(err error) []string {
 
 // Peak finds the highest reflectivity near a wavelength; see PeakReflectivity.
 func (s Stack) Peak(angle units.Angle, pol Polarization, near units.Length) (Peak, error) {
-	if err := first(checkWavelength(near), s.check()); err != nil {
+	if err := first(positive("near", near), s.check()); err != nil {
 		return Peak{}, err
 	}
 	from, to := s.between(near)

@@ -11,9 +11,8 @@ type plan struct {
 	films  []film
 	faces  []face
 	steps  []step
+	top    turn    // from the vacuum above into what lies there
 	blocks []block // from the top
-	bottom turn    // from the last film into what lies below
-	rough  bool    // some face is rough
 }
 
 type film struct {
@@ -37,8 +36,8 @@ type turn int
 type block struct {
 	times    int
 	from, to int
-	first    turn // from what lies above into the first film
 	wrap     turn // from the last film into the first one of the next period
+	below    turn // from the last film of all into what lies below
 }
 
 // step is a film and the face that leads into it from the film above in the
@@ -56,7 +55,6 @@ const lookBack = 32
 func (p *plan) make(s *Stack) {
 	p.media = append(p.media[:0], Index{})
 	p.films, p.faces, p.steps, p.blocks = p.films[:0], p.faces[:0], p.steps[:0], p.blocks[:0]
-	p.rough = false
 	above := 0
 	for i := range s.Repeats {
 		above = p.block(&s.Repeats[i], above)
@@ -65,7 +63,16 @@ func (p *plan) make(s *Stack) {
 	if s.Substrate != nil {
 		below = p.medium(s.Substrate)
 	}
-	p.bottom = p.turn(above, below, s.BottomRoughness)
+	p.into(p.turn(above, below, s.BottomRoughness))
+}
+
+// into takes the face below all that is planned so far.
+func (p *plan) into(t turn) {
+	if n := len(p.blocks); n > 0 {
+		p.blocks[n-1].below = t
+	} else {
+		p.top = t
+	}
 }
 
 // block plans one sequence below a medium and returns the medium of its last
@@ -78,7 +85,8 @@ func (p *plan) block(r *Repeat, above int) int {
 		m := p.medium(l.Medium)
 		into := p.turn(last, m, l.Roughness)
 		if i == 0 {
-			b.first, into = into, 0
+			p.into(into)
+			into = 0
 		}
 		p.steps = append(p.steps, step{into, p.film(film{m, float64(l.Thickness)})})
 		last = m
@@ -115,7 +123,6 @@ func (p *plan) turn(above, below int, roughness units.Length) turn {
 		return 0
 	}
 	f := face{above, below, float64(roughness) * float64(roughness)}
-	p.rough = p.rough || f.variance > 0
 	for i := max(0, len(p.faces)-lookBack); i < len(p.faces); i++ {
 		switch p.faces[i] {
 		case f:

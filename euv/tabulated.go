@@ -1,6 +1,10 @@
 package euv
 
-import "example.com/dosewright/units"
+import (
+	"math"
+
+	"example.com/dosewright/units"
+)
 
 // tabulated holds the scattering factors of some formulas at a list of
 // wavelengths, found in the tables once. Densities and thicknesses may change
@@ -48,8 +52,8 @@ func remembered[T any](in *map[*compound][]T, at []units.Length, c *compound, fi
 	return row, nil
 }
 
-// indices writes the index at every wavelength of t to dst.
-func (m Material) indices(dst []Index, t *tabulated) error {
+// indices writes the indices at the wavelengths of t from number from on.
+func (m Material) indices(dst []Index, t *tabulated, from int) error {
 	if err := m.check(); err != nil {
 		return err
 	}
@@ -57,16 +61,19 @@ func (m Material) indices(dst []Index, t *tabulated) error {
 	if err != nil {
 		return err
 	}
-	for i := range dst {
-		if dst[i], err = m.times(one[i]); err != nil {
-			return err
-		}
+	perVolume, sound := m.perVolume(), true
+	for i, n := range one[from:][:len(dst)] {
+		dst[i] = Index{n.Delta * perVolume, n.Beta * perVolume}
+		sound = sound && dst[i].Delta < 1 && dst[i].Delta+dst[i].Beta < math.Inf(1)
 	}
-	return nil
+	for i := 0; i < len(dst) && !sound && err == nil; i++ { // which one is it?
+		_, err = m.times(one[from+i])
+	}
+	return err
 }
 
 // indices writes n to all of dst.
-func (n Index) indices(dst []Index, _ *tabulated) error {
+func (n Index) indices(dst []Index, _ *tabulated, _ int) error {
 	if err := n.check(); err != nil {
 		return err
 	}

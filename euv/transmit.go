@@ -32,20 +32,11 @@ func (s Stack) checkTransmits(asked string) error {
 //	t = Π (1 + r)·exp(−ikgd) / (1 + r·up)
 //
 // over all faces and films, which no absorber can make overflow.
-func (w *wave) through(p *plan, l *light, pol Polarization) {
-	n := len(l.k)
-	w.enter(p, l)
-	w.reflect(p, l, pol)
-	w.half = w.half.resize(len(p.films))
-	for i, f := range p.films {
-		l.phases(w.half[i][:n], w.normal[f.medium][:n], f.thickness/2)
-	}
-	for i := range n {
-		w.up[i&(lanes-1)], w.down[i&(lanes-1)] = 0, 1
-	}
-	w.crossFace(p.bottom, n)
+func (w *wave) through(p *plan, n int) {
+	w.start(n)
 	for i := len(p.blocks) - 1; i >= 0; i-- {
 		b := &p.blocks[i]
+		w.crossFace(b.below, n)
 		for left := b.times; left > 0; left-- {
 			for j := b.to - 1; j >= b.from; j-- {
 				f := p.steps[j].film
@@ -57,7 +48,16 @@ func (w *wave) through(p *plan, l *light, pol Polarization) {
 				w.crossFace(b.wrap, n)
 			}
 		}
-		w.crossFace(b.first, n)
+	}
+	w.crossFace(p.top, n)
+}
+
+// halve computes half the phases of the films, which transmission needs too.
+func (w *wave) halve(p *plan, l *light) {
+	w.half = w.half.resize(len(p.films))
+	for i, f := range p.films {
+		n := len(l.k)
+		l.phases(w.half[i][:n], w.normal[f.medium][:n], f.thickness/2)
 	}
 }
 
@@ -79,8 +79,10 @@ func (w *wave) crossFace(t turn, n int) {
 // transmittance writes the intensities that pass to dst, one a lane: above and
 // below there is vacuum, so that |t|² is the share of the power.
 func (w *wave) transmittance(dst []units.Ratio, p *plan, l *light, pol Polarization) {
-	w.each(dst, l, pol, func(dst []units.Ratio, pol Polarization) {
-		w.through(p, l, pol)
+	w.enter(p, l)
+	w.halve(p, l)
+	w.each(dst, p, l, pol, func(dst []units.Ratio) {
+		w.through(p, len(dst))
 		for i, t := range w.down[:len(dst)] {
 			dst[i] = units.Ratio(real(t)*real(t) + imag(t)*imag(t))
 		}

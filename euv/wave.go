@@ -6,13 +6,12 @@ import (
 	"example.com/dosewright/units"
 )
 
-// light is what falls on a stack: some wavelengths ("lanes") at one angle, and
-// the indices of all media there. The work goes through the stack once, and at
-// each place through all lanes, so that the processor overlaps them.
+// light is what falls on a stack: some wavelengths ("lanes") at one angle. The
+// work goes through the stack once, and at each place through all lanes, so that
+// the processor overlaps them.
 type light struct {
 	k             []float64 // wave numbers 2π/λ in m⁻¹, one a lane
 	sinSq, cosine float64   // of the angle from the normal
-	index         [][]Index // of each medium of the plan, one a lane
 }
 
 // lanes is how many wavelengths go through a stack together: few enough that
@@ -27,43 +26,33 @@ func (l *light) point(angle units.Angle) {
 	l.sinSq, l.cosine = sin*sin, cos
 }
 
-// between is the part of the light from lane from to lane to; its indices stand
-// in rows, which is made longer when it must be.
-func (l *light) between(from, to int, rows [][]Index) light {
-	part := *l
-	part.k, part.index = l.k[from:to], rows[:0]
-	for _, row := range l.index {
-		part.index = append(part.index, row[from:to])
-	}
-	return part
-}
-
 // rows are lists of complex numbers, one a lane.
 type rows [][lanes]complex128
 
 // wave is what the media, films and faces of a plan do to light: memory for
 // one evaluation after the other.
 type wave struct {
-	normal rows // normal component of each medium, over k
-	square rows // n² of each medium, for p
-	phase  rows // of each film
-	half   rows // half the phase of each film, for transmission
-	damp   rows // Névot–Croce factor of each face
-	r      rows // reflection coefficient of each face, seen from above
+	index  [][lanes]Index    // of each medium
+	normal rows              // normal component of each medium, over k
+	phase  rows              // of each film
+	half   rows              // half the phase of each film, for transmission
+	r      rows              // reflection coefficient of each face, seen from above
+	damp   [lanes]complex128 // Névot–Croce factor of one face
 
 	up, down   [lanes]complex128 // amplitudes of the light, up to a common factor
 	a, b, c, d [lanes]complex128 // one period of a repeating sequence
-	ratio, low [lanes]complex128 // of its eigenvalues, and the lower of them
 
-	other [lanes]units.Ratio // intensities of p, beside those of s
+	other [lanes]units.Ratio // intensities of s, beside those of p
 }
 
 // fit gives the wave the sizes of a plan.
 func (w *wave) fit(p *plan) {
+	if cap(w.index) < len(p.media) {
+		w.index = make([][lanes]Index, len(p.media))
+	}
+	w.index = w.index[:len(p.media)]
 	w.normal = w.normal.resize(len(p.media))
-	w.square = w.square.resize(len(p.media))
 	w.phase = w.phase.resize(len(p.films))
-	w.damp = w.damp.resize(len(p.faces))
 	w.r = w.r.resize(len(p.faces))
 }
 
@@ -74,39 +63,45 @@ func (r rows) resize(n int) rows {
 	return r[:n]
 }
 
-// enter computes what both polarizations share.
+// tabulate finds the indices of the plan's media, for the wavelengths of the
+// table from one number to another.
+func (w *wave) tabulate(p *plan, t *tabulated, from, to int) error {
+	for i, m := range p.media {
+		if err := m.indices(w.index[i][:to-from], t, from); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// enter computes the films' phases and the faces' coefficients for s.
 func (w *wave) enter(p *plan, l *light) {
-	for m := range p.media {
-		l.normals(w.normal[m][:len(l.k)], l.index[m])
+	n := len(l.k)
+	for i := range w.normal[0][:n] { // the vacuum above
+		w.normal[0][i] = complex(l.cosine, 0)
+	}
+	for m := 1; m < len(p.media); m++ {
+		l.normals(w.normal[m][:n], w.index[m][:n])
 	}
 	for i, f := range p.films {
-		l.phases(w.phase[i][:len(l.k)], w.normal[f.medium][:len(l.k)], f.thickness)
+		l.phases(w.phase[i][:n], w.normal[f.medium][:n], f.thickness)
 	}
 	for i, f := range p.faces {
+		above, below := w.normal[f.above][:n], w.normal[f.below][:n]
+		reflectS(w.r[i][:n], above, below)
 		if f.variance > 0 {
-			l.damps(w.damp[i][:len(l.k)], w.normal[f.above][:len(l.k)], w.normal[f.below][:len(l.k)], f.variance)
+			l.damps(w.damp[:n], above, below, f.variance)
+			multiply(w.r[i][:n], w.damp[:n])
 		}
 	}
 }
 
-// reflect computes the coefficients of the faces for one polarization.
-func (w *wave) reflect(p *plan, l *light, pol Polarization) {
+// turnToP turns the coefficients for s into those for p, which phases and
+// roughness do not notice.
+func (w *wave) turnToP(p *plan, l *light) {
 	n := len(l.k)
-	if pol == PolarizationP {
-		for m := range p.media {
-			squares(w.square[m][:n], l.index[m])
-		}
-	}
 	for i, f := range p.faces {
-		r := w.r[i][:n]
-		if pol == PolarizationP {
-			reflectP(r, w.normal[f.above][:n], w.normal[f.below][:n], w.square[f.above][:n], w.square[f.below][:n])
-		} else {
-			reflectS(r, w.normal[f.above][:n], w.normal[f.below][:n])
-		}
-		if f.variance > 0 {
-			multiply(r, w.damp[i][:n])
-		}
+		reflectP(w.r[i][:n], w.normal[f.above][:n], w.normal[f.below][:n], l.sinSq)
 	}
 }
 
@@ -114,27 +109,28 @@ func (w *wave) reflect(p *plan, l *light, pol Polarization) {
 // lane.
 func (w *wave) reflectivity(dst []units.Ratio, p *plan, l *light, pol Polarization) {
 	w.enter(p, l)
-	w.each(dst, l, pol, func(dst []units.Ratio, pol Polarization) {
-		w.reflect(p, l, pol)
-		w.fold(p, len(l.k))
+	w.each(dst, p, l, pol, func(dst []units.Ratio) {
+		w.fold(p, len(dst))
 		w.intensities(dst)
 	})
 }
 
 // each asks for the intensities of the polarizations that the light has, and
 // takes their mean.
-func (w *wave) each(dst []units.Ratio, l *light, pol Polarization, ask func([]units.Ratio, Polarization)) {
-	if l.sinSq == 0 {
-		pol = PolarizationS
-	}
-	if pol != Unpolarised {
-		ask(dst, pol)
+func (w *wave) each(dst []units.Ratio, p *plan, l *light, pol Polarization, ask func([]units.Ratio)) {
+	if pol == PolarizationS || l.sinSq == 0 {
+		ask(dst)
 		return
 	}
-	ask(dst, PolarizationS)
-	ask(w.other[:len(dst)], PolarizationP)
-	for i := range dst {
-		dst[i] = 0.5 * (dst[i] + w.other[i])
+	if pol == Unpolarised {
+		ask(w.other[:len(dst)])
+	}
+	w.turnToP(p, l)
+	ask(dst)
+	if pol == Unpolarised {
+		for i := range dst {
+			dst[i] = 0.5 * (dst[i] + w.other[i])
+		}
 	}
 }
 

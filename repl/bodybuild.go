@@ -45,6 +45,7 @@ func polarization(word string) euv.Polarization {
 
 // question makes the node of what a body does to light.
 func question(c *program.Checker, k *program.Call, q *asked, own []*program.Node) *program.Node {
+	q.numbers = len(k.Args[0].Numbers())
 	f := &program.Function{Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "angle"}, {Name: "roughness"}},
 		Call: q.call, Spectral: q.spectral, Kinks: q.kinks}
 	return c.Made(f, append(own, k.Args[0].Numbers()...), program.Type{}, k.Tree.Where)
@@ -57,34 +58,12 @@ func buildMaterial(d units.Dimension, ask func(euv.Material, units.Length) (floa
 		if err != nil {
 			return nil, err
 		}
-		q := &asked{body: m}
+		q := &asked{body: m, numbers: 1}
 		f := &program.Function{Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "density"}}, Kinks: q.kinks,
 			Call: func(x []float64) (float64, []string, error) {
 				v, err := ask(m.at(x[1]), units.Length(x[0]))
-				return v, nil, fault(err)
+				return v, euv.Surface{Medium: m.at(x[1])}.Warnings(), fault(err)
 			}}
 		return c.Made(f, []*program.Node{k.Args[1], k.Args[0].Numbers()[0]}, program.Type{Dim: d}, k.Tree.Where), nil
 	}
-}
-
-// buildCurve reads a table along straight lines.
-func buildCurve(c *program.Checker, k *program.Call) (*program.Node, error) {
-	xs, ys, x := k.Args[0], k.Args[1], k.Args[2]
-	if xs.Type.Dim != x.Type.Dim {
-		return nil, &syntax.Error{Marks: []syntax.Span{k.Exprs[0].Span(), k.Exprs[2].Span()}, Msg: "xs and x of curve are of one dimension", Hint: k.Func.Signature(), Cause: units.ErrDimension}
-	}
-	f := &program.Function{Name: "curve", Params: []program.Param{{Name: "x"}, {Name: "xs"}}, Call: func(v []float64) (float64, []string, error) {
-		n := (len(v) - 1) / 2
-		if len(v) != 2*n+1 {
-			return 0, nil, errLists
-		}
-		a, b := make([]units.Ratio, n), make([]units.Ratio, n)
-		for i := range n {
-			a[i], b[i] = units.Ratio(v[1+i]), units.Ratio(v[1+n+i])
-		}
-		y, err := euv.Curve(a, b, units.Ratio(v[0]))
-		return float64(y), nil, fault(err)
-	}}
-	t := program.Item(ys)
-	return c.Made(f, []*program.Node{x, xs, ys}, t, k.Tree.Where), nil
 }

@@ -66,6 +66,10 @@ func (b *Budget) lines(style Style) []Line {
 		return append(out, Line{"no uncertain input takes part", Plain})
 	}
 	out = append(out, b.table().lines(style)...)
+	if b.Expanded == 0 {
+		out = append(out, Line{"the inputs leave no uncertainty", Plain})
+		return append(out, warningLines(b.Of.Warnings)...)
+	}
 	unit := b.Of.Unit
 	dof := "infinitely many effective degrees of freedom"
 	if b.Of.DoF > 0 {
@@ -112,11 +116,14 @@ func (s *Session) budget(j job) ([]Result, error) {
 func (s *Session) share(sources []*program.Node, i int, r study.Contribution, of *Value, text string) Share {
 	n := sources[r.Slot]
 	unit := s.unitOf(n)
-	step := of.Unit.FromDifference(1)
+	step, sign := of.Unit.FromDifference(1), 1.0
+	if in, minus, _ := s.input(n.Owner); in == n {
+		sign = minus // the name is minus what stands in its literal
+	}
 	return Share{
 		Input: s.inputName(sources, r.Slot, text), Unit: unit,
-		X: unit.From(n.Value()), U: unit.FromDifference(n.Spread().U),
-		C: r.C * step / unit.FromDifference(1), CU: r.U * step, Part: r.Share,
+		X: unit.From(sign * n.Value()), U: unit.FromDifference(n.Spread().U),
+		C: sign * r.C * step / unit.FromDifference(1), CU: r.U * step, Part: r.Share,
 	}
 }
 

@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"errors"
 	"fmt"
 
 	"example.com/dosewright/repl/internal/program"
@@ -10,8 +11,8 @@ import (
 // whatIf is a named case: formulas in the place of some names.
 type whatIf struct {
 	name string
-	note string
-	sets map[string]*program.Node
+	text string // the statement, with which its formulas are checked again
+	sets []syntax.Setting
 }
 
 // baseCase is the session as it stands.
@@ -22,31 +23,10 @@ func (s *Session) defineCase(j job) ([]Result, error) {
 	if a.Name == baseCase {
 		return nil, syntax.Fail(a.NameAt, "base is the session as it stands", "choose another name for the case")
 	}
-	w := &whatIf{name: a.Name, note: j.note, sets: map[string]*program.Node{}}
+	w := &whatIf{a.Name, j.text, a.Sets}
 	c := s.checker(j.text, "")
-	for _, set := range a.Sets {
-		d := s.store.defs[set.Name]
-		if d == nil || d.node == nil || d.node.Type.Kind != program.Number && d.node.Type.Kind != program.Point {
-			return nil, syntax.Fail(set.NameAt, set.Name+" is no single value that a case could set", "a case sets names that are defined")
-		}
-		if w.sets[set.Name] != nil {
-			return nil, syntax.Fail(set.NameAt, set.Name+" is set twice", "set each name once")
-		}
-		n, err := c.Check(set.X)
-		if err != nil {
-			return nil, err
-		}
-		have := d.node.Type
-		if n.Type.Plane == "" {
-			have.Plane = ""
-		}
-		if n.Type != have {
-			return nil, syntax.Fail(set.X.Span(), fmt.Sprintf("%s is %s, not %s", set.Name, s.describe(d.node.Type), s.describe(n.Type)), "a case keeps the dimension and plane of each name")
-		}
-		if s.reaches(n, set.Name) {
-			return nil, syntax.Fail(set.X.Span(), set.Name+" would rest on itself in this case", "write the value without "+set.Name)
-		}
-		w.sets[set.Name] = n
+	if _, err := s.settings(w, c); err != nil {
+		return nil, err
 	}
 	if s.cases == nil {
 		s.cases = map[string]*whatIf{}
@@ -55,11 +35,58 @@ func (s *Session) defineCase(j job) ([]Result, error) {
 	return noteOnly(c.Warnings), nil
 }
 
-// reaches says whether a formula rests on a name.
-func (s *Session) reaches(n *program.Node, name string) bool {
-	var below []string
-	n.Names(func(x string) { below = append(below, x) })
-	return s.store.ancestors(below)[name]
+// settings checks what a case sets against the session as it stands.
+func (s *Session) settings(w *whatIf, c *program.Checker) (map[string]*program.Node, error) {
+	sets := map[string]*program.Node{}
+	for _, set := range w.sets {
+		d := s.store.defs[set.Name]
+		if d == nil || d.node == nil || d.node.Type.Kind != program.Number && d.node.Type.Kind != program.Point {
+			return nil, syntax.Fail(set.NameAt, set.Name+" is no single value that a case could set", "a case sets names that are defined")
+		}
+		if sets[set.Name] != nil {
+			return nil, syntax.Fail(set.NameAt, set.Name+" is set twice", "set each name once")
+		}
+		n, err := c.Check(set.X)
+		if err != nil {
+			return nil, err
+		}
+		if _, fits := inPlaceOf(d.node.Type, n.Type); !fits {
+			return nil, syntax.Fail(set.X.Span(), fmt.Sprintf("%s is %s, not %s", set.Name, s.pointOr(d.node.Type), s.pointOr(n.Type)), "a case keeps the dimension and plane of each name")
+		}
+		sets[set.Name] = n
+	}
+	for _, set := range w.sets {
+		if s.returns(set.Name, sets) {
+			return nil, syntax.Fail(set.X.Span(), set.Name+" would rest on itself in this case", "write the value without what rests on "+set.Name)
+		}
+	}
+	return sets, nil
+}
+
+// returns says whether a name rests on itself under the formulas of a case.
+func (s *Session) returns(name string, sets map[string]*program.Node) bool {
+	seen := map[string]bool{}
+	var reaches func(at string) bool
+	reaches = func(at string) bool {
+		found := false
+		below := func(u string) {
+			if u == name {
+				found = true
+			} else if !found && !seen[u] {
+				seen[u] = true
+				found = reaches(u)
+			}
+		}
+		if n := sets[at]; n != nil {
+			n.Names(below)
+		} else if d := s.store.defs[at]; d != nil {
+			for _, u := range d.uses {
+				below(u)
+			}
+		}
+		return found
+	}
+	return reaches(name)
 }
 
 func (s *Session) compare(j job) ([]Result, error) {
@@ -69,33 +96,50 @@ func (s *Session) compare(j job) ([]Result, error) {
 	if err != nil {
 		return nil, err
 	}
-	var cases []*whatIf
-	hasBase := false
+	rows := []compared{{name: baseCase}}
 	for _, n := range a.Cases {
-		w := s.cases[n.Name]
 		if n.Name == baseCase {
-			w, hasBase = &whatIf{name: baseCase}, true
-			cases = append([]*whatIf{w}, cases...)
 			continue
 		}
+		w := s.cases[n.Name]
 		if w == nil {
 			return nil, syntax.Fail(n.Where, n.Name+" is no case", "define it: case "+n.Name+" : x = …; base is the session as it stands")
 		}
-		cases = append(cases, w)
+		sets, err := s.settings(w, s.checker(w.text, ""))
+		if err != nil {
+			return nil, &syntax.Error{Marks: []syntax.Span{n.Where}, Msg: "case " + n.Name + " does not fit the session any more: " + messageOf(err), Hint: "define the case again", Cause: err}
+		}
+		rows = append(rows, compared{n.Name, sets, n.Where})
 	}
-	if !hasBase {
-		cases = append([]*whatIf{{name: baseCase}}, cases...)
-	}
-	return s.comparison(f, c, cases)
+	return s.comparison(f, c, rows)
 }
 
-func (s *Session) comparison(f *formulas, c *program.Checker, cases []*whatIf) ([]Result, error) {
+// compared is a row of a comparison.
+type compared struct {
+	name string
+	sets map[string]*program.Node
+	at   syntax.Span
+}
+
+// messageOf is what a refusal says, without its way on.
+func messageOf(err error) string {
+	var bad *syntax.Error
+	if errors.As(err, &bad) {
+		return bad.Msg
+	}
+	return err.Error()
+}
+
+func (s *Session) comparison(f *formulas, c *program.Checker, rows []compared) ([]Result, error) {
 	t := &Table{Columns: []Column{{"case", ""}}, Warnings: c.Warnings}
 	var base []float64
-	for _, w := range cases {
-		y, err := s.under(w, f)
-		if err != nil {
-			return nil, s.blame(fmt.Errorf("in case %s: %w", w.name, err), c)
+	for _, w := range rows {
+		y, err := s.under(w.sets, f)
+		switch {
+		case err != nil && w.sets == nil:
+			return nil, s.blame(err, c)
+		case err != nil:
+			return nil, &syntax.Error{Marks: []syntax.Span{w.at}, Msg: "in case " + w.name + ": " + messageOf(s.blame(err, c)), Hint: "set other values in this case", Cause: err}
 		}
 		if base == nil {
 			base = y
@@ -119,14 +163,14 @@ func (s *Session) comparison(f *formulas, c *program.Checker, cases []*whatIf) (
 }
 
 // under computes formulas with what a case sets.
-func (s *Session) under(w *whatIf, f *formulas) ([]float64, error) {
+func (s *Session) under(sets map[string]*program.Node, f *formulas) ([]float64, error) {
 	var names []string
-	for name := range w.sets {
+	for name := range sets {
 		names = append(names, name)
 	}
 	resolve := s.opened(names, false)
 	p, err := program.CompileAll(f.nodes, func(name string) (*program.Node, error) {
-		if n := w.sets[name]; n != nil {
+		if n := sets[name]; n != nil {
 			return n, nil
 		}
 		return resolve(name)

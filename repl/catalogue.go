@@ -24,15 +24,6 @@ var catalogue = sync.OnceValue(func() map[string]*program.Function {
 	return rows
 })
 
-// withHost returns the catalogue with the functions of a host beside it.
-func withHost(rows map[string]*program.Function, host []Function) map[string]*program.Function {
-	own := maps.Clone(rows)
-	for _, f := range host {
-		own[f.row.Name] = f.row
-	}
-	return own
-}
-
 // functionsByName lists the functions of the session in alphabetical order.
 func (s *Session) functionsByName() []*program.Function {
 	list := slices.Collect(maps.Values(s.rows))

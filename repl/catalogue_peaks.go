@@ -1,15 +1,11 @@
 package repl
 
 import (
-	"errors"
-
 	"example.com/dosewright/euv"
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
 )
-
-var errLists = errors.New("xs and ys of curve are lists of one length")
 
 // peakRow is a row about the peak of a stack alone.
 func peakRow(name, summary string, result program.Result, take func(euv.Peak) (float64, error)) *program.Function {

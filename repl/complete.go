@@ -171,7 +171,7 @@ func (s *Session) expressionWords(but []string) []string {
 	for _, f := range s.rows {
 		list = append(list, f.Name+"(")
 	}
-	for name := range constants() {
+	for name := range s.constants {
 		list = append(list, name)
 	}
 	list = append(list, "if(")

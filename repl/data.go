@@ -6,15 +6,13 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"slices"
 	"strings"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
 )
-
-// maxDataRows bounds a table that is read.
-const maxDataRows = 100_000
 
 // data reads the columns of a file as lists NAME.column.
 func (s *Session) data(j job) ([]Result, error) {
@@ -38,10 +36,12 @@ func (s *Session) data(j job) ([]Result, error) {
 	}
 	t, err := s.readTable(a.File.Text, text)
 	if err != nil {
-		return refuse(err, "the first line has heads such as dose / (mJ/cm^2), each line below it as many numbers")
+		return refuse(err, headsHint)
 	}
 	return s.keepTable(j, a, t)
 }
+
+const headsHint = "the first line has names with units, parted by commas: dose / (mJ/cm^2), throughput / (wafer/h); each line below it has as many numbers"
 
 // tableRead is a table of numbers: a list a column.
 type tableRead struct {
@@ -56,7 +56,7 @@ func (s *Session) readTable(name string, text []byte) (*tableRead, error) {
 	r.TrimLeadingSpace = true
 	heads, err := r.Read()
 	if err != nil {
-		return nil, fmt.Errorf("%s has no line of heads: %w: %w", name, err, ErrFile)
+		return nil, fmt.Errorf("%s has no line of heads: %w", name, ErrFile)
 	}
 	t := &tableRead{}
 	var columns []units.Unit
@@ -81,11 +81,18 @@ func (s *Session) readTable(name string, text []byte) (*tableRead, error) {
 		if errors.Is(err, io.EOF) {
 			break
 		}
-		if err != nil {
+		var bad *csv.ParseError
+		switch {
+		case errors.Is(err, csv.ErrFieldCount) && errors.As(err, &bad):
+			return nil, fmt.Errorf("%s:%d: %s under %s: %w", name, bad.Line, howMany(len(cells), "cell"), howMany(len(heads), "head"), ErrFile)
+		case errors.As(err, &bad):
+			return nil, fmt.Errorf("%s:%d: a quotation mark stands at the wrong place: %w", name, bad.Line, ErrFile)
+		case err != nil:
 			return nil, fmt.Errorf("%s: %w: %w", name, err, ErrFile)
 		}
-		if t.rows++; t.rows > maxDataRows {
-			return nil, fmt.Errorf("%s has more than %d rows: %w", name, maxDataRows, ErrFile)
+		if t.rows++; t.rows > s.limits.Data {
+			most := s.limits.Data
+			return nil, fmt.Errorf("%s has more than %d rows, take a part of them: %w: %w", name, most, ErrFile, &LimitError{"Data", int64(most), int64(most) + 1})
 		}
 		line, _ := r.FieldPos(0)
 		for k, cell := range cells {
@@ -141,29 +148,42 @@ func (s *Session) readHead(head string) (string, units.Unit, error) {
 	return name, u, nil
 }
 
+// keepTable makes the columns names; those of a table that is read again are
+// redefined, and what rests on them must keep its dimension.
 func (s *Session) keepTable(j job, a *syntax.Data, t *tableRead) ([]Result, error) {
-	kept := 0
+	before := s.snapshot()
+	var columns []string
 	for k, name := range t.names {
 		if name == "" {
 			continue
 		}
-		kept++
+		columns = append(columns, name)
 		d := s.newDefinition(a.Name+"."+name, j)
 		d.node, d.bare = t.lists[k], true
-		s.store.put(d)
+		if err := s.install(d, a.NameAt); err != nil {
+			s.restore(before)
+			return nil, err
+		}
 	}
-	if kept == 0 {
-		return nil, syntax.Fail(a.File.Where, "no head of this table is a name", "heads are such as dose / (mJ/cm^2)")
+	if len(columns) == 0 {
+		return nil, syntax.Fail(a.File.Where, "no head of this table is a name", headsHint)
+	}
+	for _, old := range s.tables[a.Name] {
+		name := a.Name + "." + old
+		if slices.Contains(columns, old) {
+			continue
+		}
+		if users := s.store.dependents(name); len(users) > 0 {
+			s.restore(before)
+			return nil, &syntax.Error{Marks: []syntax.Span{a.NameAt}, Msg: "this table has no column " + old + " any more, on which " + users[0] + " rests", Hint: "nothing has changed; give the new table another name", Cause: ErrDependent}
+		}
+		s.store.remove(name)
 	}
 	if s.tables == nil {
 		s.tables = map[string][]string{}
 	}
-	for _, name := range t.names {
-		if name != "" {
-			s.tables[a.Name] = append(s.tables[a.Name], name)
-		}
-	}
-	line := fmt.Sprintf("%d rows of %s", t.rows, strings.Join(s.tables[a.Name], ", "))
+	s.tables[a.Name] = columns
+	line := howMany(t.rows, "row") + " of " + strings.Join(columns, ", ")
 	if len(t.skipped) > 0 {
 		line += "; left out, since their heads are no names: " + strings.Join(t.skipped, ", ")
 	}

@@ -58,7 +58,7 @@ func (s *Session) define(j job) ([]Result, error) {
 
 // nameable refuses constants as names, and a name that its own formula uses.
 func (s *Session) nameable(name string, at syntax.Span, x syntax.Expr) error {
-	if _, ok := constants()[name]; ok {
+	if _, ok := s.constants[name]; ok {
 		return syntax.Fail(at, name+" is a constant of the language", "choose another name, such as "+name+"_1")
 	}
 	var self *syntax.Error

@@ -102,15 +102,29 @@ func (st *store) dependents(name string) []string {
 	return order
 }
 
-// forgetValues marks what rests on a name as not computed. What is unknown
-// already has only unknown dependents.
+// forgetValues marks what rests on a name as not computed. A value that is
+// unknown already has only unknown dependents; chains, bodies, lists and
+// functions have no value of their own and pass it on.
 func (st *store) forgetValues(name string) {
-	for user := range st.users[name] {
-		if d := st.defs[user]; d != nil && d.known {
+	seen := map[string]bool{}
+	var visit func(string)
+	visit = func(n string) {
+		for user := range st.users[n] {
+			d := st.defs[user]
+			if d == nil || seen[user] || !d.known && d.hasValue() {
+				continue
+			}
+			seen[user] = true
 			d.known = false
-			st.forgetValues(user)
+			visit(user)
 		}
 	}
+	visit(name)
+}
+
+// hasValue says whether a definition is worth one number.
+func (d *definition) hasValue() bool {
+	return d.node != nil && (d.node.Type.Kind == program.Number || d.node.Type.Kind == program.Point)
 }
 
 // path finds how a name leads to another through what it uses.

@@ -125,7 +125,7 @@ func (s *Session) blame(err error, c *program.Checker) error {
 		e.Msg, e.Hint = "the result is not a finite number", "look at the range of each input, and at roots and logarithms of what is negative"
 	}
 	var arg *program.ArgumentFault
-	if errors.As(err, &arg) {
+	if errors.As(err, &arg) && run.Function() != "" {
 		e.Hint = "help " + run.Function() + " shows the range of each argument"
 	}
 	if run.Node == nil {
@@ -154,21 +154,43 @@ func (s *Session) where(name string) string {
 // Eval answers one expression, perhaps with a unit in brackets behind it, and
 // leaves the session as it is. The error is a *Refusal.
 func (s *Session) Eval(ctx context.Context, text string) (*Value, error) {
-	st, bad := syntax.Parse(text)
-	if bad != nil {
-		return nil, s.refusal(text, bad).Err
-	}
-	show, ok := st.Do.(*syntax.Show)
-	if !ok {
-		return nil, s.refusal(text, syntax.Fail(syntax.Span{Start: 0, End: len(text)}, "this is no expression", "Feed takes statements")).Err
-	}
-	c := s.checker(text, "")
-	v, err := s.answer(ctx, show.X, show.Stated, c)
-	if err == nil && v == nil {
-		err = syntax.Fail(show.X.Span(), "this has no single value", "take one of it, such as mean(…)")
-	}
+	v, err := s.eval(ctx, text)
 	if err != nil {
 		return nil, s.refusal(text, err).Err
 	}
 	return v, nil
+}
+
+func (s *Session) eval(ctx context.Context, text string) (*Value, error) {
+	x, stated, err := s.expression(text)
+	if err == nil {
+		err = ctx.Err()
+	}
+	if err != nil {
+		return nil, err
+	}
+	v, err := s.answer(ctx, x, stated, s.checker(text, ""))
+	if err == nil && v == nil {
+		err = syntax.Fail(x.Span(), "this has no single value", "take one of it, such as mean(…)")
+	}
+	return v, err
+}
+
+// expression reads a text that is one expression.
+func (s *Session) expression(text string) (syntax.Expr, *syntax.Stated, error) {
+	if s.broken != nil {
+		return nil, nil, s.broken
+	}
+	if long := s.statementFits(text); long != nil {
+		return nil, nil, long
+	}
+	st, bad := syntax.Parse(text)
+	if bad != nil {
+		return nil, nil, bad
+	}
+	show, ok := st.Do.(*syntax.Show)
+	if !ok {
+		return nil, nil, syntax.Fail(syntax.Span{Start: 0, End: len(text)}, "this is no expression", "Feed takes statements")
+	}
+	return show.X, show.Stated, nil
 }

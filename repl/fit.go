@@ -20,10 +20,11 @@ type FitResult struct {
 	Residual    *Value // standard deviation of the residuals
 	DoF         int
 	Rows        int
+	Warnings    []string
 }
 
 func (f *FitResult) table() *Table {
-	t := &Table{Columns: []Column{{"name", ""}, {"value", ""}, {"u", ""}, {"unit", ""}}}
+	t := &Table{Columns: []Column{{"name", ""}, {"value", ""}, {"u", ""}, {"unit", ""}}, Warnings: f.Warnings}
 	for _, n := range f.Names {
 		t.Columns = append(t.Columns, Column{"r with " + n, ""})
 	}
@@ -43,18 +44,24 @@ func (f *FitResult) table() *Table {
 
 func (f *FitResult) lines(style Style) []Line {
 	out := f.table().lines(style)
-	said := fmt.Sprintf("%d rows, %d degrees of freedom", f.Rows, f.DoF)
+	said := howMany(f.Rows, "row")
+	switch f.DoF {
+	case 0:
+		said += ", none to spare: no uncertainty can be told"
+	case 1:
+		said += ", 1 degree of freedom"
+	default:
+		said += fmt.Sprintf(", %d degrees of freedom", f.DoF)
+	}
 	if f.DoF > 0 {
 		said += ", residual standard deviation " + f.Residual.Text(style.Digits)
-	} else {
-		said += ": no uncertainty can be told from so few rows"
 	}
 	return append(out, Line{said, Plain})
 }
 
 func (f *FitResult) record() Record {
 	t := f.table()
-	return Record{Kind: TableRecord, Columns: t.Columns, Rows: t.Rows}
+	return Record{Kind: TableRecord, Columns: t.Columns, Rows: t.Rows, Warnings: t.Warnings}
 }
 
 func (s *Session) fit(j job) ([]Result, error) {
@@ -69,6 +76,9 @@ func (s *Session) fit(j job) ([]Result, error) {
 		return nil, err
 	}
 	w.columns(columns)
+	if n := len(a.Names); w.rows < n {
+		return nil, syntax.Fail(a.Names[0].Where.Join(a.Names[n-1].Where), howMany(w.rows, "row")+" cannot tell "+howMany(n, "name"), "fit fewer names, or give more rows")
+	}
 	f, err := s.formulas(c, []syntax.Column{{X: a.X}, {X: a.Y}})
 	if err == nil {
 		err = c.Comparable(a.X, a.Y)
@@ -174,7 +184,7 @@ func (w *fitting) named(err error) string {
 // result makes the names inputs with what was found.
 func (w *fitting) result(f *formulas) ([]Result, error) {
 	s := w.session
-	out := &FitResult{DoF: w.fit.DoF, Correlation: w.fit.Correlation, Rows: w.rows}
+	out := &FitResult{DoF: w.fit.DoF, Correlation: w.fit.Correlation, Rows: w.rows, Warnings: w.c.Warnings}
 	before := s.snapshot()
 	for i, n := range w.a.Names {
 		d := s.store.defs[n.Name]
@@ -188,9 +198,7 @@ func (w *fitting) result(f *formulas) ([]Result, error) {
 			return nil, err
 		}
 	}
-	if w.fit.U != nil {
-		s.correlate(w.a.Names, w.fit.Correlation)
-	}
+	s.correlate(w.a.Names, w.fit.Correlation)
 	out.Residual = s.value(w.fit.Residual, program.Type{Dim: f.types[0].Dim}, nil, nil)
 	return []Result{out}, nil
 }
@@ -198,7 +206,7 @@ func (w *fitting) result(f *formulas) ([]Result, error) {
 // become replaces a definition by a literal with the value that was found.
 func (s *Session) become(j job, n syntax.Name, d *definition, v *Value) error {
 	bracket := ""
-	if d.unit != nil {
+	if d.unit != nil && !d.unit.IsOne() {
 		bracket = " [" + d.unit.String() + "]"
 	}
 	unit := v.Unit
@@ -214,20 +222,22 @@ func (s *Session) become(j job, n syntax.Name, d *definition, v *Value) error {
 	return s.install(fresh, n.Where)
 }
 
-// literalOf writes a value in full, as the language reads it.
+// literalOf writes a value in full, as the language reads it; a minus stands
+// before the parentheses of (x ± u).
 func literalOf(v *Value, unit units.Unit) string {
 	text := unit.Digits(v.SI)
+	if v.Uncertain {
+		number, negative := strings.CutPrefix(text, "-")
+		text = "(" + number + " ± " + unit.Interval().Digits(v.U) + ")"
+		if negative {
+			text = "-" + text
+		}
+	}
 	if !unit.IsOne() {
 		text += " " + unit.String()
 	}
-	if v.Uncertain {
-		text += " ± " + unit.Interval().Digits(v.U)
-		if !unit.IsOne() {
-			text += " " + unit.Interval().String()
-		}
-		if v.DoF > 0 {
-			text += " (nu=" + strconv.FormatFloat(v.DoF, 'g', -1, 64) + ")"
-		}
+	if v.Uncertain && v.DoF > 0 {
+		text += " (nu=" + strconv.FormatFloat(v.DoF, 'g', -1, 64) + ")"
 	}
 	if v.Plane != "" {
 		text += " at " + v.Plane
@@ -235,19 +245,13 @@ func literalOf(v *Value, unit units.Unit) string {
 	return text
 }
 
+// correlate puts the correlations that a fit found, nil for none, in the place of
+// all that its names had before.
 func (s *Session) correlate(names []syntax.Name, r [][]float64) {
-	fitted := map[string]bool{}
 	for _, n := range names {
-		fitted[n.Name] = true
+		s.part(n.Name)
 	}
-	kept := s.pairings
-	s.pairings = nil
-	for _, p := range kept {
-		if !fitted[p.a] || !fitted[p.b] {
-			s.pairings = append(s.pairings, p)
-		}
-	}
-	for i := range names {
+	for i := range r {
 		for k := range i {
 			s.pairings = append(s.pairings, pairing{names[k].Name, names[i].Name, r[k][i]})
 		}

@@ -19,9 +19,9 @@ func (s *Session) help(j job) ([]Result, error) {
 		if near := s.near(word); len(near) > 0 {
 			hint = "did you mean " + strings.Join(near, " or ") + "?"
 		}
-		return nil, syntax.Fail(j.do.(*syntax.Command).TextAt, "there is no help on "+word, hint)
+		return nil, syntax.Fail(j.do.(*syntax.Command).TextAt, "there is no help on "+shortened(word), hint)
 	}
-	return []Result{&Text{content: append([]string{"what mentions " + word + ":"}, found...)}}, nil
+	return []Result{&Text{content: append([]string{"what mentions " + shortened(word) + ":"}, found...)}}, nil
 }
 
 // Help returns the help on a topic, nil when there is none; "" is the way in.
@@ -51,7 +51,7 @@ func (s *Session) helpOn(word string) []string {
 	if f := s.rows[word]; f != nil {
 		return s.functionHelp(f)
 	}
-	if k, ok := constants()[word]; ok {
+	if k, ok := s.constants[word]; ok {
 		return []string{word + " = " + k.text(s) + ", " + k.doc}
 	}
 	if d := s.store.defs[word]; d != nil {

@@ -7,11 +7,9 @@ import (
 	"slices"
 	"strings"
 
+	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
 )
-
-// MaxImports bounds how many files one session may bring in.
-const MaxImports = 500
 
 // imported is a file that was brought in, with what it defined.
 type imported struct {
@@ -78,8 +76,8 @@ func (s *Session) bringIn(ctx context.Context, file string, trail []string) erro
 	if slices.Contains(trail, file) {
 		return fmt.Errorf("these files import one another in a circle: %s: %w", strings.Join(append(trail, file), " → "), ErrFile)
 	}
-	if len(s.imports) >= MaxImports {
-		return fmt.Errorf("more than %d files are brought in: %w", MaxImports, ErrFile)
+	if most := s.limits.Imports; len(s.imports) >= most {
+		return fmt.Errorf("more than %d files are brought in, join some of them: %w: %w", most, ErrFile, &LimitError{"Imports", int64(most), int64(most) + 1})
 	}
 	text, err := readFile(s.config.Files, file)
 	if err != nil {
@@ -123,6 +121,9 @@ func (s *Session) bringPart(ctx context.Context, file string, p whole, trail []s
 		name = a.Name
 	case *syntax.Block:
 		name = a.Name
+	case *syntax.Material:
+		name = program.MaterialKey(a.Name)
+	case *syntax.Data, *syntax.Case, *syntax.Correlation:
 	case *syntax.Command:
 		if a.Word == "import" {
 			return "", s.nested(ctx, file, p.number, a.Text, trail)

@@ -19,6 +19,9 @@ func (s *Session) install(d *definition, at syntax.Span) error {
 		return &syntax.Error{Marks: []syntax.Span{at}, Msg: d.name + " is defined in " + s.where(d.name) + " already",
 			Hint: "rename one of the two, or forget " + d.name + " before the import", Cause: ErrFile}
 	}
+	if err := s.definitionsFit(d.name, at); err != nil {
+		return err
+	}
 	old := s.store.defs[d.name]
 	undo := s.replace(d)
 	if err := s.survives(d, old, at); err != nil {
@@ -91,6 +94,9 @@ func (s *Session) dependentsKeep(d, old *definition, at syntax.Span) error {
 		fresh := *was
 		fresh.known = false
 		err := s.checked(&fresh)
+		if e := s.store.circle(&fresh, at); err == nil && e != nil {
+			err = e
+		}
 		if err == nil && fresh.node != nil && fresh.node.Type != was.node.Type {
 			err = fmt.Errorf("%s would be %s instead of %s", name, s.describe(fresh.node.Type), s.describe(was.node.Type))
 		}

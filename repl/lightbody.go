@@ -41,10 +41,11 @@ func (b *gasBody) body(x []float64) (euv.Body, error) {
 // asked is a question to a body: the row's own numbers first, then those of the
 // body.
 type asked struct {
-	body  builder
-	own   int // how many numbers are the row's own: wavelength, angle, roughness
-	pol   euv.Polarization
-	light func(*euv.Evaluator, []units.Ratio, euv.Body) error
+	body    builder
+	numbers int // how many numbers the body has
+	own     int // how many are the row's own: wavelength, angle, roughness
+	pol     euv.Polarization
+	light   func(*euv.Evaluator, []units.Ratio, euv.Body) error
 }
 
 // at builds the body, with the roughness of the question on a surface.
@@ -108,9 +109,14 @@ func (q *asked) spectral() func(first, others, out []float64) error {
 	}
 }
 
-// kinks are those of the body's tables; they do not depend on its numbers.
+// kinks are those of the body's tables; they do not depend on its numbers, so
+// that the body is built with ones.
 func (q *asked) kinks(low, high float64) []float64 {
-	b, err := q.body.body(ones(q.body))
+	x := make([]float64, q.numbers)
+	for i := range x {
+		x[i] = 1
+	}
+	b, err := q.body.body(x)
 	if err != nil {
 		return nil
 	}
@@ -119,13 +125,4 @@ func (q *asked) kinks(low, high float64) []float64 {
 		list = append(list, float64(l))
 	}
 	return list
-}
-
-// ones are numbers with which any body can be built.
-func ones(b builder) []float64 {
-	x := make([]float64, 4096)
-	for i := range x {
-		x[i] = 1
-	}
-	return x
 }

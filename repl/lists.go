@@ -58,7 +58,7 @@ func (s *Session) showList(n *program.Node, stated *syntax.Stated, x syntax.Expr
 	for _, y := range v.Values {
 		largest = max(largest, y, -y)
 	}
-	v.Unit = s.display(largest, program.Type{Dim: n.Type.Dim})
+	v.Unit = s.display(largest, program.Item(n))
 	if stated != nil {
 		u, err := c.StatedUnit(stated, n, x)
 		if err != nil {

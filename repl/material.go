@@ -62,26 +62,26 @@ func (c scope) Integrate(f func(dst, wavelengths []float64) error, center, width
 	return euv.BandMean(f, units.Length(center), units.Length(width), at)
 }
 
-// defineMaterial keeps a material under a name of its own kind.
+// defineMaterial keeps a material under a name of its own kind, when its density
+// makes sense.
 func (s *Session) defineMaterial(j job) ([]Result, error) {
 	a := j.do.(*syntax.Material)
 	d := s.newDefinition(program.MaterialKey(a.Name), j)
 	if err := s.checked(d); err != nil {
 		return nil, err
 	}
+	density, _, err := s.compute(d.node.Numbers()[0])
+	if err != nil {
+		return nil, s.blame(err, s.checker(d.text, d.name))
+	}
+	m, err := euv.NewMaterial(a.Formula, units.Density(density))
+	if err != nil {
+		return nil, &syntax.Error{Marks: []syntax.Span{a.X.Span()}, Msg: err.Error(), Hint: "write material " + a.Name + " = " + a.Formula + " 2.2 g/cm^3", Cause: err}
+	}
 	if err := s.install(d, a.NameAt); err != nil {
 		return nil, err
 	}
-	m := d.node.Body().(*materialBody)
-	density, _, err := s.compute(d.node.Numbers()[0])
-	if err == nil {
-		_, err = euv.NewMaterial(a.Formula, units.Density(density))
-	}
-	if err != nil {
-		s.store.remove(d.name)
-		return nil, &syntax.Error{Marks: []syntax.Span{a.X.Span()}, Msg: err.Error(), Hint: "write material " + m.name + " = " + a.Formula + " 2.2 g/cm^3", Cause: err}
-	}
-	return noteOnly(d.warning), nil
+	return noteOnly(append(d.warning, euv.Surface{Medium: m}.Warnings()...)), nil
 }
 
 // checkedMaterial gives a material its node.

@@ -50,6 +50,9 @@ func ratio(args []program.Type) (program.Type, error) {
 	if args[0].Dim != args[1].Dim || args[0].Plane != args[1].Plane {
 		return program.Type{}, errors.New("both arguments are of one dimension at one plane")
 	}
+	if args[0].Kind == program.Point || args[1].Kind == program.Point {
+		return program.Type{}, errors.New("temperature points have no ratio: subtract a reference first")
+	}
 	return program.Type{}, nil
 }
 

@@ -33,7 +33,7 @@ func (s *Session) listNames(j job) ([]Result, error) {
 	if len(rows) == 0 {
 		what := "nothing is defined; name = formula defines"
 		if c.Text != "" {
-			what = "no name fits " + c.Text
+			what = "no name fits " + shortened(c.Text)
 		}
 		return []Result{&Text{content: []string{what}}}, nil
 	}
@@ -119,6 +119,7 @@ func (s *Session) forget(j job) ([]Result, error) {
 	for _, n := range c.Names {
 		s.store.remove(n.Name)
 		delete(s.planes, n.Name)
+		s.part(n.Name)
 	}
 	return nil, nil
 }

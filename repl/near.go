@@ -24,7 +24,7 @@ func (s *Session) near(word string) []string {
 	for name := range s.rows {
 		consider(name)
 	}
-	for name := range constants() {
+	for name := range s.constants {
 		consider(name)
 	}
 	slices.SortFunc(list, func(a, b guess) int {

@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"io"
 	"path"
+	"slices"
 	"strings"
 
 	"example.com/dosewright/repl/internal/syntax"
@@ -30,8 +31,10 @@ func ending(name string) string { return strings.ToLower(strings.TrimPrefix(path
 
 // destinations checks the files that a statement names, before any work.
 func (s *Session) destinations(out syntax.Output, tables bool) error {
-	for _, to := range out.To {
+	for i, to := range out.To {
 		switch e := ending(to.Text); {
+		case e == "csv" && slices.ContainsFunc(out.To[:i], func(b syntax.String) bool { return ending(b.Text) == "csv" }):
+			return syntax.Fail(to.Where, "one statement writes one table", "leave out one of the .csv files")
 		case s.config.Create == nil:
 			return &syntax.Error{Marks: []syntax.Span{to.Where}, Msg: "this session writes no files", Hint: "leave out to, the reply holds the same", Cause: ErrFile}
 		case e == "csv" && tables:

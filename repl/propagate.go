@@ -108,9 +108,15 @@ func (s *Session) propagate(j job) ([]Result, error) {
 	if len(in.program.Sources) == 0 {
 		return nil, syntax.Fail(a.Of.X.Span(), "no uncertain input takes part in this", "give an input its uncertainty, as in 3.0 W ± 2 %")
 	}
+	if err := s.drawable(in, j.text, a.Of.X); err != nil {
+		return nil, err
+	}
 	asked.Watch = s.watch(j.ctx, asked.Trials)
 	d, err := study.Propagate(j.ctx, func() study.Block { return in.program.Block() }, in.sources, asked)
-	if d == nil || err != nil && !errors.Is(err, context.Canceled) {
+	switch {
+	case errors.Is(err, study.ErrRange) || errors.Is(err, study.ErrSize):
+		return nil, &syntax.Error{Marks: []syntax.Span{a.Of.X.Span()}, Msg: err.Error(), Hint: "options stand behind a colon, as in propagate x : trials = 1e5, coverage = 95 %", Cause: err}
+	case d == nil || err != nil && j.ctx.Err() == nil: // an end of the context keeps what was computed
 		return nil, s.blame(err, c)
 	}
 	out := s.distribution(d, n.Type, unit, asked.Seed, c.Warnings)
@@ -135,10 +141,30 @@ func (s *Session) distribution(d *study.Distribution, t program.Type, unit *unit
 	return out
 }
 
+// drawable refuses correlated inputs that have no distribution together.
+func (s *Session) drawable(in *inputs, text string, at syntax.Expr) error {
+	for _, p := range in.pairs {
+		a, b := in.list[p.A], in.list[p.B]
+		nameA, nameB := s.inputName(in.program.Sources, p.A, text), s.inputName(in.program.Sources, p.B, text)
+		switch {
+		case a.Shape != study.Normal || b.Shape != study.Normal:
+			return syntax.Fail(at.Span(), nameA+" and "+nameB+" are correlated and not both normal: no distribution of the two together is known", "budget takes the correlation to first order")
+		case a.DoF != b.DoF:
+			return syntax.Fail(at.Span(), nameA+" and "+nameB+" are correlated and differ in their degrees of freedom: no distribution of the two together is known", "give both the same nu, or see budget")
+		}
+	}
+	return nil
+}
+
 // options reads trials = 1e6, seed = 1, coverage = 95 %.
 func (s *Session) options(ctx context.Context, list []syntax.Option, c *program.Checker) (study.Propagation, error) {
-	p := study.Propagation{Trials: 1_000_000, Seed: 1, Coverage: 0.95, Bins: 50}
-	for _, o := range list {
+	p := study.Propagation{Trials: s.limits.usual(), Seed: 1, Coverage: 0.95, Bins: 50}
+	for i, o := range list {
+		for _, before := range list[:i] {
+			if before.Name == o.Name {
+				return p, syntax.Fail(o.Where, o.Name+" is set twice", "set it once")
+			}
+		}
 		v, err := s.single(ctx, o.X, c)
 		if err != nil {
 			return p, err
@@ -147,6 +173,9 @@ func (s *Session) options(ctx context.Context, list []syntax.Option, c *program.
 		whole := v.Unit.Dimension().IsNumber() && x >= 0 && x == math.Trunc(x) && x < 1<<53
 		switch {
 		case o.Name == "trials" && whole && x <= study.MaxTrials:
+			if err := s.trialsFit(int(x), o.Where.Join(o.X.Span())); err != nil {
+				return p, err
+			}
 			p.Trials = int(x)
 		case o.Name == "seed" && whole:
 			p.Seed = uint64(x)

@@ -1,6 +1,9 @@
 package repl
 
-import "encoding/json"
+import (
+	"bytes"
+	"encoding/json"
+)
 
 // Record is a result as plain values, for JSON. Which fields it writes depends
 // on what it is; numbers are in full, and Text alone is rounded.
@@ -56,7 +59,7 @@ type Cell struct {
 // MarshalJSON writes the number or the text.
 func (c Cell) MarshalJSON() ([]byte, error) {
 	if c.IsText {
-		return json.Marshal(c.Text)
+		return plainJSON(c.Text)
 	}
 	return json.Marshal(c.Number)
 }
@@ -67,9 +70,15 @@ func (r Record) MarshalJSON() ([]byte, error) {
 	if warnings == nil {
 		warnings = []string{}
 	}
+	if r.Columns == nil {
+		r.Columns = []Column{}
+	}
+	if r.Rows == nil {
+		r.Rows = [][]Cell{}
+	}
 	switch r.Kind {
 	case ValueRecord:
-		return json.Marshal(struct {
+		return plainJSON(struct {
 			Line        int          `json:"line"`
 			Text        string       `json:"text"`
 			Value       json.Number  `json:"value"`
@@ -81,7 +90,7 @@ func (r Record) MarshalJSON() ([]byte, error) {
 			Warnings    []string     `json:"warnings"`
 		}{r.Line, r.Text, r.Value, r.Unit, r.SI, r.Dimension, r.Plane, r.Uncertainty, warnings})
 	case DistributionRecord:
-		return json.Marshal(struct {
+		return plainJSON(struct {
 			Line        int          `json:"line"`
 			Text        string       `json:"text"`
 			Value       json.Number  `json:"value"`
@@ -98,14 +107,14 @@ func (r Record) MarshalJSON() ([]byte, error) {
 			Warnings    []string     `json:"warnings"`
 		}{r.Line, r.Text, r.Value, r.Unit, r.SI, r.Dimension, r.Plane, r.Uncertainty, r.Low, r.High, r.Coverage, r.Trials, r.Skewness, warnings})
 	case CheckRecord:
-		return json.Marshal(struct {
+		return plainJSON(struct {
 			Line     int      `json:"line"`
 			Text     string   `json:"text"`
 			Holds    bool     `json:"holds"`
 			Warnings []string `json:"warnings"`
 		}{r.Line, r.Text, r.Holds, warnings})
 	case TableRecord:
-		return json.Marshal(struct {
+		return plainJSON(struct {
 			Line     int      `json:"line"`
 			Text     string   `json:"text"`
 			Columns  []Column `json:"columns"`
@@ -113,15 +122,24 @@ func (r Record) MarshalJSON() ([]byte, error) {
 			Warnings []string `json:"warnings"`
 		}{r.Line, r.Text, r.Columns, r.Rows, warnings})
 	case ErrorRecord:
-		return json.Marshal(struct {
+		return plainJSON(struct {
 			Line   int    `json:"line"`
 			Error  string `json:"error"`
 			Column int    `json:"column"`
 		}{r.Line, r.Error, r.Column})
 	}
-	return json.Marshal(struct {
+	return plainJSON(struct {
 		Line     int      `json:"line"`
 		Text     string   `json:"text"`
 		Warnings []string `json:"warnings"`
 	}{r.Line, r.Text, warnings})
+}
+
+// plainJSON leaves <, > and & as they are.
+func plainJSON(v any) ([]byte, error) {
+	var b bytes.Buffer
+	e := json.NewEncoder(&b)
+	e.SetEscapeHTML(false)
+	err := e.Encode(v)
+	return bytes.TrimSpace(b.Bytes()), err
 }

@@ -22,6 +22,13 @@ var (
 )
 
 // Refusal is the error of a statement that was refused. Nothing has changed.
+//
+// errors.Is tells why: ErrPlane, ErrCircle, ErrDependent, ErrDivision,
+// ErrNotFinite, ErrUnknown, ErrSize, ErrFile, units.ErrDimension,
+// units.ErrExponent, units.ErrRoot, or that the context has ended. errors.As
+// finds a *units.DimensionError with both dimensions, a *PlaneError with both
+// planes, a *LimitError, a *units.ParseError, or a *euv.ArgumentError with the
+// argument that is out of range. Marks gives the places in Text.
 type Refusal struct {
 	Text string // the statement as it was written
 	err  *syntax.Error

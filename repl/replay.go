@@ -1,11 +1,13 @@
 package repl
 
 import (
+	"bytes"
 	"context"
 	"path"
 	"slices"
 	"strings"
 
+	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
 )
 
@@ -71,6 +73,9 @@ func Replay(ctx context.Context, config Config, name string) (*Replayed, error) 
 		p.out.Refused = append(p.out.Refused, Remark{len(list), "the block that begins here has no end: " + p.session.block[0]})
 	}
 	p.out.Updated = []byte(p.text.String())
+	if bytes.Contains(text, []byte("\r\n")) {
+		p.out.Updated = bytes.ReplaceAll(p.out.Updated, []byte("\n"), []byte("\r\n"))
+	}
 	return p.out, nil
 }
 
@@ -191,7 +196,11 @@ func (p *player) changed(recorded []string, im *Imported) {
 
 // definedName is the name that a definition on one line gives.
 func definedName(text string) string {
-	text = strings.TrimPrefix(text, "chain ")
+	if rest, ok := strings.CutPrefix(text, "material "); ok {
+		name, _, _ := strings.Cut(rest, " ")
+		return program.MaterialKey(name)
+	}
+	text = strings.TrimPrefix(strings.TrimPrefix(text, "chain "), "stack ")
 	end := strings.IndexAny(text, " [=(:")
 	if end < 0 {
 		return text

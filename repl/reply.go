@@ -71,9 +71,7 @@ func (r *Reply) linesIn(style Style) []Line {
 func (r *Reply) Records() []Record {
 	var out []Record
 	for _, x := range r.Results {
-		rec := x.record()
-		rec.Text = joinLines(x.lines(r.style))
-		out = append(out, rec)
+		out = append(out, RecordOf(x, r.style.Digits))
 	}
 	var bad *Refusal
 	if errors.As(r.Err, &bad) {

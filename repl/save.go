@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"io"
 	"strings"
+	"unicode/utf8"
 
 	"example.com/dosewright/repl/internal/syntax"
 )
@@ -13,8 +14,8 @@ import (
 func (s *Session) Transcript() []byte {
 	var b strings.Builder
 	for _, e := range s.entries {
-		if passing(e.text) {
-			continue
+		if passing(e.text) || !utf8.ValidString(e.text) || strings.ContainsRune(e.text, 0) {
+			continue // what no session file may hold was refused
 		}
 		b.WriteString(e.text + "\n")
 		writeReply(&b, e.reply)

@@ -2,6 +2,7 @@ package repl
 
 import (
 	"fmt"
+	"math"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/study"
@@ -23,6 +24,9 @@ func (f *Found) lines(style Style) []Line {
 	for _, r := range f.Remarks {
 		out = append(out, Line{r, Plain})
 	}
+	if len(f.Rows) == 0 {
+		out = append(out, warningLines(f.Warnings)...)
+	}
 	return out
 }
 
@@ -32,9 +36,6 @@ func (s *Session) search(j job) ([]Result, error) {
 	v, err := s.vary(j.ctx, c, a.Axis)
 	if err != nil {
 		return nil, err
-	}
-	if v.from == v.to {
-		return nil, syntax.Fail(a.Axis.From.Span().Join(a.Axis.To.Span()), "the two ends of this range are one place", "write for "+v.name+" in a .. b with a below b")
 	}
 	if v.from > v.to {
 		v.from, v.to = v.to, v.from
@@ -88,7 +89,7 @@ func (h *hunt) solve() ([]Result, error) {
 	if err != nil {
 		return nil, h.session.blame(err, h.c)
 	}
-	out := &Found{}
+	out := &Found{Table: Table{Warnings: h.c.Warnings}}
 	typical := r.Nearest
 	if len(r.List) > 0 {
 		typical = r.List[0]
@@ -109,6 +110,9 @@ func (h *hunt) solve() ([]Result, error) {
 		out.Remarks = append(out.Remarks, h.noRoot(r)...)
 	}
 	for _, x := range r.Jumps {
+		if math.Abs(x) < 1e-15*math.Max(math.Abs(h.v.from), math.Abs(h.v.to)) {
+			x = 0 // found to rounding only
+		}
 		out.Remarks = append(out.Remarks, "at "+h.place(x)+" the sides change places without meeting: a jump or a pole, no root")
 	}
 	if r.Failed > 0 {
@@ -138,7 +142,7 @@ func (h *hunt) optimum(which string) ([]Result, error) {
 		return nil, h.session.blame(err, h.c)
 	}
 	unit := h.session.choose(h.f, 0, o.List[0].Y)
-	out := &Found{Table: Table{Columns: []Column{{h.v.name, stated(h.v.unit)}, {h.f.names[0], stated(unit)}, {"where", ""}}}}
+	out := &Found{Table: Table{Columns: []Column{{h.v.name, stated(h.v.unit)}, {h.f.names[0], stated(unit)}, {"where", ""}}, Warnings: h.c.Warnings}}
 	for _, p := range o.List {
 		out.Rows = append(out.Rows, []Cell{number(h.v.unit.From(p.X)), number(unit.From(p.Y)), word(boundaries[p.Boundary])})
 		if p.To != p.X {

@@ -31,6 +31,13 @@ type Config struct {
 	Progress Progress
 	// Functions of the host, beside those of the catalogue.
 	Functions []Function
+	// Constants of the host, beside those of the language.
+	Constants []Constant
+	// Units is what unit words mean, nil for units.Standard; a host makes its own
+	// with units.System.WithUnit and WithCounted.
+	Units *units.System
+	// Limits bound what statements may cost; the zero value is their defaults.
+	Limits Limits
 	// Version is what the program that holds the session calls itself.
 	Version string
 }
@@ -38,23 +45,26 @@ type Config struct {
 // Session evaluates statements one after the other. It is not safe for
 // concurrent use; make one a goroutine.
 type Session struct {
-	config   Config
-	sys      *units.System
-	store    store
-	rows     map[string]*program.Function
-	planes   map[string][]program.Plane // by chain
-	prefer   map[units.Dimension]units.Unit
-	counted  []string
-	digits   int
-	entries  []entry
-	block    []string // lines of the block being typed
-	origin   origin   // where statements come from now
-	imports  []imported
-	pairings []pairing           // correlations of inputs
-	tables   map[string][]string // columns of each data table
-	cases    map[string]*whatIf
-	silent   bool // a replay, which writes nothing
-	steps    int  // statements run so far, those of imports included
+	config    Config
+	limits    Limits
+	broken    error // why Open would refuse the configuration
+	sys       *units.System
+	store     store
+	rows      map[string]*program.Function
+	constants map[string]constantRow
+	planes    map[string][]program.Plane // by chain
+	prefer    map[units.Dimension]units.Unit
+	counted   []string
+	digits    int
+	entries   []entry
+	block     []string // lines of the block being typed
+	origin    origin   // where statements come from now
+	imports   []imported
+	pairings  []pairing           // correlations of inputs
+	tables    map[string][]string // columns of each data table
+	cases     map[string]*whatIf
+	silent    bool // a replay, which writes nothing
+	steps     int  // statements run so far, those of imports included
 }
 
 // origin is the file and line of a statement; the zero value is the prompt.
@@ -67,21 +77,6 @@ type origin struct {
 type entry struct {
 	text  string
 	reply *Reply
-}
-
-// NewSession makes an empty session.
-func NewSession(config Config) *Session {
-	s := &Session{
-		config: config, sys: units.Standard(), store: newStore(), rows: catalogue(),
-		planes: map[string][]program.Plane{}, prefer: map[units.Dimension]units.Unit{}, digits: DefaultDigits,
-	}
-	if len(config.Functions) > 0 {
-		s.rows = withHost(s.rows, config.Functions)
-	}
-	if s.config.Dir == "" {
-		s.config.Dir = "."
-	}
-	return s
 }
 
 // DefaultDigits is how many significant digits an answer shows.
@@ -126,6 +121,11 @@ func (s *Session) feedBlock(ctx context.Context, line string) *Reply {
 	if strings.HasPrefix(line, "|") {
 		return &Reply{Text: line, More: true}
 	}
+	if syntax.BlockEnd(line) && len(s.block) >= syntax.MaxBlockLines {
+		heading := s.block[0]
+		s.block = nil
+		return s.refusal(heading, syntax.Fail(syntax.Span{Start: 0, End: len(heading)}, fmt.Sprintf("this block has more than %d lines", syntax.MaxBlockLines), "make two of it"))
+	}
 	if syntax.BlockEnd(line) {
 		text := strings.Join(append(s.block, "end"), "\n")
 		s.block = nil
@@ -137,8 +137,7 @@ func (s *Session) feedBlock(ctx context.Context, line string) *Reply {
 		return r
 	}
 	if len(s.block) >= syntax.MaxBlockLines {
-		s.block = nil
-		return s.refusal(line, syntax.Fail(syntax.Span{}, fmt.Sprintf("this block has more than %d lines", syntax.MaxBlockLines), "make two of it"))
+		return &Reply{Text: line, More: true} // its end refuses it
 	}
 	s.block = append(s.block, "  "+strings.TrimSpace(line))
 	return &Reply{Text: line, More: true}
@@ -219,7 +218,7 @@ func (c scope) Own(name string) *program.OwnFunction {
 	return nil
 }
 
-func (c scope) Constant(name string) *program.Node { return constants()[name].node }
+func (c scope) Constant(name string) *program.Node { return c.s.constants[name].node }
 
 func (c scope) Function(name string) *program.Function { return c.s.rows[name] }
 

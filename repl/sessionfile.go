@@ -31,6 +31,9 @@ func readFile(files fs.FS, name string) ([]byte, error) {
 	if files == nil {
 		return nil, fmt.Errorf("this session reads no files: %w", ErrFile)
 	}
+	if about, err := fs.Stat(files, name); err == nil && !about.Mode().IsRegular() {
+		return nil, fmt.Errorf("%s cannot be read: it is no ordinary file: %w", name, ErrFile)
+	}
 	f, err := files.Open(name)
 	if err != nil {
 		var at *fs.PathError

@@ -1,6 +1,7 @@
 package repl
 
 import (
+	"errors"
 	"fmt"
 	"math"
 
@@ -22,11 +23,14 @@ type stackBody struct {
 
 // layerGroup is a line of the block: layers that repeat together.
 type layerGroup struct {
-	times  int // place of the number of repeats; -1 for once
+	label  string
+	at     syntax.Span // of the number of repeats
+	times  int         // its place; -1 for once
 	layers []layerPlace
 }
 
 type layerPlace struct {
+	at                        syntax.Span
 	material                  *materialBody
 	density, thickness, rough int // rough is -1 for that of the stack
 }
@@ -48,16 +52,16 @@ func (b *stackBody) stack(x []float64) (euv.Stack, error) {
 		if g.times >= 0 {
 			n := x[g.times]
 			if n < 1 || n > 10_000 || n != math.Trunc(n) {
-				return s, fmt.Errorf("the layers of %s repeat %s times; that is a whole number from 1 to 10000", b.name, units.FormatNumber(n, 5))
+				return s, b.fault(g.at, g.label, "its layers repeat "+units.FormatNumber(n, 5)+" times; that is a whole number from 1 to 10000")
 			}
 			r.Times = int(n)
 		}
 		for _, l := range g.layers {
-			own := rough
-			if l.rough >= 0 {
-				own = x[l.rough]
+			layer := l.layer(x, rough)
+			if d := layer.Thickness; !(d > 0 && d <= 1) {
+				return s, b.fault(l.at, g.label, fmt.Sprintf("the layer of %s has the thickness %s; it must be greater than 0 and at most 1 m", l.material.name, units.Of(d)))
 			}
-			r.Layers = append(r.Layers, euv.Layer{Medium: l.material.at(x[l.density]), Thickness: units.Length(x[l.thickness]), Roughness: units.Length(own)})
+			r.Layers = append(r.Layers, layer)
 		}
 		s.Repeats = append(s.Repeats, r)
 	}
@@ -66,6 +70,27 @@ func (b *stackBody) stack(x []float64) (euv.Stack, error) {
 	}
 	s.BottomRoughness = units.Length(rough)
 	return s, nil
+}
+
+// layer is a layer with its numbers; rough is the roughness that the stack gives
+// those without one.
+func (l layerPlace) layer(x []float64, rough float64) euv.Layer {
+	if l.rough >= 0 {
+		rough = x[l.rough]
+	}
+	return euv.Layer{Medium: l.material.at(x[l.density]), Thickness: units.Length(x[l.thickness]), Roughness: units.Length(rough)}
+}
+
+// layerFault is a line of a stack that makes no sense with the numbers of now.
+type layerFault struct {
+	at  syntax.Span // in the block
+	msg string
+}
+
+func (f *layerFault) Error() string { return f.msg }
+
+func (b *stackBody) fault(at syntax.Span, label, why string) error {
+	return &layerFault{at, label + " of " + b.name + ": " + why}
 }
 
 // stacking is a block of a stack that is being checked.
@@ -150,8 +175,9 @@ func (w *stacking) material(name syntax.Name) (*materialBody, int, error) {
 }
 
 func (w *stacking) layers(line syntax.BlockLine) error {
-	g := layerGroup{times: -1}
+	g := layerGroup{label: line.Label, times: -1}
 	if line.Times != nil {
+		g.at = line.Times.Span()
 		n, err := w.c.Quantity(line.Times, units.Dimension{}, "how often layers repeat")
 		if err != nil {
 			return err
@@ -177,7 +203,7 @@ func (w *stacking) layer(x syntax.Expr) (layerPlace, error) {
 	if !ok {
 		return layerPlace{}, syntax.Fail(x.Span(), "a layer is a material and a thickness", "write Si 4.15 nm, or Si 4.15 nm rough 0.6 nm")
 	}
-	p := layerPlace{rough: -1}
+	p := layerPlace{at: l.Where, rough: -1}
 	var err error
 	if p.material, p.density, err = w.material(l.Material); err != nil {
 		return p, err
@@ -207,17 +233,17 @@ func (s *Session) defineStack(j job) ([]Result, error) {
 	if err := s.checked(d); err != nil {
 		return nil, err
 	}
-	before := s.store.defs[b.Name]
-	if err := s.install(d, b.NameAt); err != nil {
-		return nil, err
-	}
 	warnings, err := s.tried(d)
 	if err != nil {
-		s.store.remove(b.Name)
-		if before != nil {
-			s.store.put(before)
+		e := &syntax.Error{Marks: []syntax.Span{b.NameAt}, Msg: err.Error(), Hint: "see: help stack", Cause: err}
+		var fault *layerFault
+		if errors.As(err, &fault) {
+			e.Marks[0] = fault.at
 		}
-		return nil, &syntax.Error{Marks: []syntax.Span{b.NameAt}, Msg: err.Error(), Hint: "see: help stack", Cause: err}
+		return nil, e
+	}
+	if err := s.install(d, b.NameAt); err != nil {
+		return nil, err
 	}
 	return noteOnly(append(d.warning, warnings...)), nil
 }

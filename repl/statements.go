@@ -135,6 +135,12 @@ func wordOf(a syntax.Action) string {
 
 // perform finds the row of a statement and runs it.
 func (s *Session) perform(ctx context.Context, text string, st *syntax.Statement) ([]Result, error) {
+	if s.broken != nil {
+		return nil, s.broken
+	}
+	if err := s.statementFits(text); err != nil {
+		return nil, err
+	}
 	word := wordOf(st.Do)
 	for _, row := range statements() {
 		if row.word == word {

@@ -4,17 +4,12 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"strconv"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/study"
 	"example.com/dosewright/repl/internal/syntax"
 	"example.com/dosewright/units"
-)
-
-// How many rows a reply holds, and how many points a picture.
-const (
-	maxRows     = 1000
-	maxPictured = 200_000
 )
 
 // SweepTable is the answer of a sweep: a table, or what was made of it.
@@ -37,13 +32,21 @@ func (t *SweepTable) lines(style Style) []Line {
 		out = append(out, Line{l, Plain})
 	}
 	if len(t.files) > 0 {
-		out = append(out, Line{fmt.Sprintf("%d points", t.Points), Plain})
+		out = append(out, Line{howMany(t.Points, "point"), Plain})
 		out = append(out, t.files...)
 	}
-	if t.Holes > 0 {
-		out = append(out, Line{fmt.Sprintf("note: points without a value: %d: %v", t.Holes, t.Why), Warning})
+	if t.hidden {
+		out = append(out, warningLines(t.Warnings)...)
 	}
 	return out
+}
+
+// howMany writes "1 point" and "2 points".
+func howMany(n int, thing string) string {
+	if n == 1 {
+		return "1 " + thing
+	}
+	return strconv.Itoa(n) + " " + thing + "s"
 }
 
 func (s *Session) sweep(j job) ([]Result, error) {
@@ -95,7 +98,7 @@ type sweeping struct {
 
 func (w *sweeping) result() ([]Result, error) {
 	for i, ax := range w.a.Axes {
-		x, err := w.session.axis(w.job, w.c, i, ax, w.vs[i])
+		x, err := w.session.axis(w.job, i, ax, w.vs[i])
 		if err != nil {
 			return nil, err
 		}
@@ -105,8 +108,13 @@ func (w *sweeping) result() ([]Result, error) {
 	if err := w.fits(); err != nil {
 		return nil, err
 	}
-	w.out = &SweepTable{Points: int(w.sweep.Points())}
+	w.out = &SweepTable{Points: int(w.sweep.Points()), Table: Table{Warnings: w.c.Warnings}}
 	w.units()
+	if _, picture := w.wants(); picture {
+		if err := w.picturable(); err != nil {
+			return nil, err
+		}
+	}
 	if err := w.compute(); err != nil {
 		return nil, err
 	}
@@ -129,15 +137,15 @@ func (w *sweeping) wants() (table *syntax.String, picture bool) {
 // fits refuses what would be too long a reply or too full a picture.
 func (w *sweeping) fits() error {
 	table, picture := w.wants()
-	n := w.sweep.Points()
+	n, l := w.sweep.Points(), w.session.limits
 	at := w.a.Axes[0].NameAt
 	switch {
-	case n > study.DefaultPoints:
-		return syntax.Fail(at, fmt.Sprintf("this sweep has %.4g points; the most are %d", n, study.DefaultPoints), "take larger steps")
-	case picture && n > maxPictured:
-		return syntax.Fail(at, fmt.Sprintf("this picture would have %.0f points; the most are %d", n, maxPictured), "take larger steps, or write a table: to \"sweep.csv\"")
-	case table == nil && !picture && n > maxRows:
-		return syntax.Fail(at, fmt.Sprintf("this table has %.0f rows; a reply holds %d", n, maxRows), "write it to a file: to \"sweep.csv\" at the end, or take fewer points")
+	case n > float64(l.Points):
+		return over(at, "Points", n, l.Points, fmt.Sprintf("this sweep has %.4g points; the most are %d", n, l.Points), "take larger steps")
+	case picture && n > float64(l.Pictured):
+		return over(at, "Pictured", n, l.Pictured, fmt.Sprintf("this picture would have %.0f points; the most are %d", n, l.Pictured), "take larger steps, or write a table: to \"sweep.csv\"")
+	case table == nil && !picture && n > float64(l.Rows):
+		return over(at, "Rows", n, l.Rows, fmt.Sprintf("this table has %.0f rows; a reply holds %d", n, l.Rows), "write it to a file: to \"sweep.csv\" at the end, or take fewer points")
 	}
 	return nil
 }
@@ -191,7 +199,7 @@ func (w *sweeping) compute() error {
 		return rows.flush()
 	})
 	w.out.hidden = err == nil
-	if !picture && w.out.Points > maxRows {
+	if !picture && w.out.Points > w.session.limits.Rows {
 		w.keep = nil
 	}
 	return err
@@ -199,13 +207,13 @@ func (w *sweeping) compute() error {
 
 func (w *sweeping) run(to *tableWriter) error {
 	_, picture := w.wants()
-	kept := w.out.Points <= maxRows || picture
+	kept := w.out.Points <= w.session.limits.Rows || picture
 	row := make([]float64, len(w.vs)+len(w.f.nodes))
 	err := w.sweep.Run(w.job.ctx, func() study.Block { return w.p.Block() }, func(r study.Row) error {
 		copy(row, r.X)
 		copy(row[len(r.X):], r.Y)
 		if r.Err != nil {
-			w.hole(row[len(r.X):], r.Err)
+			w.hole(r.X, row[len(r.X):], r.Err)
 		}
 		if kept {
 			w.keep = append(w.keep, append([]float64(nil), row...))
@@ -221,18 +229,34 @@ func (w *sweeping) run(to *tableWriter) error {
 	return w.session.blame(err, w.c)
 }
 
-func (w *sweeping) hole(y []float64, err error) {
+// hole keeps of a point the columns that do have a value.
+func (w *sweeping) hole(x, y []float64, err error) {
+	f := w.p.NewFrame()
 	for k := range y {
-		y[k] = math.NaN()
+		if w.p.RunOne(f, x, y, k) != nil {
+			y[k] = math.NaN()
+		}
 	}
 	if w.out.Holes++; w.out.Holes == 1 {
 		w.out.Why = err
 	}
 }
 
+// remark tells of the points without a value.
+func (w *sweeping) remark() {
+	switch n := w.out.Holes; n {
+	case 0:
+	case 1:
+		w.out.Warnings = append(w.out.Warnings, fmt.Sprintf("at 1 point a value is missing: %v", w.out.Why))
+	default:
+		w.out.Warnings = append(w.out.Warnings, fmt.Sprintf("at %d points a value is missing; the first: %v", n, w.out.Why))
+	}
+}
+
 func (w *sweeping) present() ([]Result, error) {
+	w.remark()
 	w.out.Columns = w.columns()
-	if w.out.Points <= maxRows {
+	if w.out.Points <= w.session.limits.Rows {
 		for _, row := range w.keep {
 			var cells []Cell
 			for k, v := range row {
@@ -246,53 +270,12 @@ func (w *sweeping) present() ([]Result, error) {
 		}
 	}
 	if _, picture := w.wants(); picture {
-		p, err := w.picture()
-		if err != nil {
-			return nil, err
-		}
-		if w.out.chart, err = w.session.draw(w.a.Out, p); err != nil {
+		var err error
+		if w.out.chart, err = w.session.draw(w.a.Out, w.picture()); err != nil {
 			return nil, err
 		}
 		w.out.hidden = w.out.hidden || len(w.out.chart) > 0 || len(w.a.Out.To) > 0
 	}
 	w.out.files = made(w.a.Out)
 	return []Result{w.out}, nil
-}
-
-// axis makes the points of one varied name.
-func (s *Session) axis(j job, c *program.Checker, slot int, a syntax.Axis, v varied) (study.Axis, error) {
-	at := a.From.Span().Join(a.To.Span())
-	refuse := func(err error) (study.Axis, error) {
-		return study.Axis{}, syntax.Fail(at, err.Error(), "write sweep x = 1 nm .. 2 nm by 0.1 nm, or 41 points, or 41 points log from above zero")
-	}
-	if a.By != nil {
-		step, err := s.single(j.ctx, a.By, c)
-		if err != nil {
-			return study.Axis{}, err
-		}
-		if step.Unit.Dimension() != v.unit.Dimension() || step.Point {
-			return study.Axis{}, syntax.Fail(a.By.Span(), "the step is "+s.kindOf(step.Unit.Dimension())+", the range "+s.describe(v.typ), "write the step in "+v.unit.Interval().String())
-		}
-		x, err := study.Stepped(slot, v.from, v.to, step.SI)
-		if err != nil {
-			return refuse(err)
-		}
-		return x, nil
-	}
-	n, err := s.single(j.ctx, a.Points, c)
-	if err != nil {
-		return study.Axis{}, err
-	}
-	if !n.Unit.Dimension().IsNumber() || n.SI != math.Trunc(n.SI) || n.SI < 2 || n.SI > 1e12 {
-		return study.Axis{}, syntax.Fail(a.Points.Span(), "a range has a whole number of points from 2 on", "write 41 points")
-	}
-	make := study.Spaced
-	if a.Log {
-		make = study.Logarithmic
-	}
-	x, err := make(slot, v.from, v.to, int(n.SI))
-	if err != nil {
-		return refuse(err)
-	}
-	return x, nil
 }

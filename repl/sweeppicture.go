@@ -2,25 +2,42 @@ package repl
 
 import (
 	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
 )
 
+// picturable refuses columns that make no picture together.
+func (w *sweeping) picturable() error {
+	if len(w.vs) == 2 && len(w.f.nodes) > 1 {
+		return syntax.Fail(w.a.Columns[1].X.Span(), "a map shows one value over two names", "leave one expression, or vary one name")
+	}
+	first := *w.f.units[0]
+	for k, u := range w.f.units {
+		if u.String() != first.String() {
+			return syntax.Fail(w.a.Columns[k].X.Span(), w.f.names[k]+" is "+statedIn(*u)+", the curves before it are "+statedIn(first),
+				"curves of one picture share a unit: state them alike, or draw two pictures")
+		}
+	}
+	return nil
+}
+
+func statedIn(u units.Unit) string {
+	if u.IsOne() {
+		return "a pure number"
+	}
+	return "stated in " + u.String()
+}
+
 // picture draws one axis as curves and two as a map.
-func (w *sweeping) picture() (*Picture, error) {
+func (w *sweeping) picture() *Picture {
 	cols := w.columns()
 	p := &Picture{X: Axis{Name: cols[0].Name, Unit: cols[0].Unit, Log: w.a.Axes[0].Log}}
 	if len(w.vs) == 2 {
-		if len(w.f.nodes) > 1 {
-			return nil, syntax.Fail(w.a.Columns[1].X.Span(), "a map shows one value over two names", "leave one expression, or vary one name")
-		}
 		p.Y = Axis{Name: cols[1].Name, Unit: cols[1].Unit, Log: w.a.Axes[1].Log}
 		p.Grid = w.grid(cols[2].head())
-		return p, nil
+		return p
 	}
 	p.Y = Axis{Name: cols[1].Name, Unit: cols[1].Unit}
 	for k, name := range w.f.names {
-		if c := cols[1+k]; c.Unit != p.Y.Unit {
-			return nil, syntax.Fail(w.a.Columns[k].X.Span(), name+" is stated in "+c.Unit+", the curves before it in "+p.Y.Unit, "curves of one picture share a unit: state them alike, or draw two pictures")
-		}
 		s := Series{Name: name}
 		for _, row := range w.keep {
 			s.X = append(s.X, w.unit(0).From(row[0]))
@@ -31,7 +48,7 @@ func (w *sweeping) picture() (*Picture, error) {
 	if len(p.Lines) > 1 {
 		p.Y.Name = "value"
 	}
-	return p, nil
+	return p
 }
 
 // grid lays the rows out; the second name varies fastest.

@@ -2,8 +2,9 @@ package repl
 
 import (
 	"context"
-	"errors"
 	"fmt"
+	"math"
+	"slices"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/study"
@@ -72,6 +73,8 @@ func (s *Session) unsure(n *program.Node) bool {
 type inputs struct {
 	program *program.Program
 	sources *study.Sources
+	list    []study.Input       // of the sources
+	pairs   []study.Correlation // by their places in the list
 }
 
 // inputsOf compiles formulas with their uncertain inputs left open.
@@ -89,26 +92,26 @@ func (s *Session) inputsOf(nodes ...*program.Node) (*inputs, error) {
 	}
 	var pairs []study.Correlation
 	for _, c := range s.pairings {
-		a, okA := s.input(c.a)
-		b, okB := s.input(c.b)
+		a, signA, okA := s.input(c.a)
+		b, signB, okB := s.input(c.b)
 		i, hasA := place[a]
 		j, hasB := place[b]
-		if okA && okB && hasA && hasB {
-			pairs = append(pairs, study.Correlation{A: i, B: j, R: c.r})
+		if okA && okB && hasA && hasB && list[i].U > 0 && list[j].U > 0 {
+			pairs = append(pairs, study.Correlation{A: i, B: j, R: signA * signB * c.r})
 		}
 	}
 	sources, err := study.NewSources(list, pairs...)
 	if err != nil {
 		return nil, err
 	}
-	return &inputs{p, sources}, nil
+	return &inputs{p, sources, list, pairs}, nil
 }
 
-// input finds the one uncertain literal that a name is.
-func (s *Session) input(name string) (*program.Node, bool) {
+// input finds the one uncertain literal that a name is, with the sign before it.
+func (s *Session) input(name string) (n *program.Node, sign float64, ok bool) {
 	d := s.store.defs[name]
 	if d == nil || d.node == nil {
-		return nil, false
+		return nil, 0, false
 	}
 	return program.Source(d.node)
 }
@@ -142,6 +145,9 @@ func (s *Session) addUncertainty(ctx context.Context, v *Value, n *program.Node)
 		return err
 	}
 	v.Uncertain, v.U, v.DoF = true, b.U, b.DoF
+	if v.chosen && !v.Point && math.Abs(v.SI) < v.U {
+		v.Unit = s.display(v.U, n.Type)
+	}
 	if b.Second.Matters {
 		v.Warnings = append(v.Warnings, s.secondOrder(v, b))
 	}
@@ -157,12 +163,12 @@ func (s *Session) secondOrder(v *Value, b *study.Budget) string {
 func (s *Session) correlation(j job) ([]Result, error) {
 	a := j.do.(*syntax.Correlation)
 	for _, n := range []syntax.Name{a.A, a.B} {
-		if _, ok := s.input(n.Name); !ok {
+		if in, _, ok := s.input(n.Name); !ok || in.Spread().U == 0 {
 			return nil, syntax.Fail(n.Where, n.Name+" is no name of one uncertain input", "a correlation joins two names such as "+n.Name+" = 3.0(1) W")
 		}
 	}
 	if a.A.Name == a.B.Name {
-		return nil, syntax.Fail(a.B.Where, "an input goes with itself already", "name two inputs")
+		return nil, syntax.Fail(a.B.Where, "an input is correlated with itself already", "name two inputs")
 	}
 	c := s.checker(j.text, "")
 	v, err := s.single(j.ctx, a.X, c)
@@ -173,20 +179,24 @@ func (s *Session) correlation(j job) ([]Result, error) {
 		return nil, syntax.Fail(a.X.Span(), "a correlation coefficient is a number from -1 to 1", "write correlation "+a.A.Name+", "+a.B.Name+" = 0.8")
 	}
 	before := s.pairings
-	s.pairings = nil
-	for _, p := range before {
-		if !(p.a == a.A.Name && p.b == a.B.Name || p.a == a.B.Name && p.b == a.A.Name) {
-			s.pairings = append(s.pairings, p)
-		}
-	}
+	s.pairings = slices.DeleteFunc(slices.Clone(before), func(p pairing) bool {
+		return p.a == a.A.Name && p.b == a.B.Name || p.a == a.B.Name && p.b == a.A.Name
+	})
 	if v.SI != 0 {
 		s.pairings = append(s.pairings, pairing{a.A.Name, a.B.Name, v.SI})
 	}
 	if err := s.fitTogether(); err != nil {
 		s.pairings = before
-		return nil, &syntax.Error{Marks: []syntax.Span{a.X.Span()}, Msg: err.Error(), Hint: "the coefficients of all pairs must allow one another; nothing has changed", Cause: err}
+		return nil, &syntax.Error{Marks: []syntax.Span{a.X.Span()}, Cause: err,
+			Msg:  "this does not go with the other correlations of " + a.A.Name + " and " + a.B.Name + ": together they leave a variance below zero",
+			Hint: "the coefficients of all pairs must allow one another; nothing has changed"}
 	}
 	return nil, nil
+}
+
+// part takes back the correlations of a name.
+func (s *Session) part(name string) {
+	s.pairings = slices.DeleteFunc(slices.Clone(s.pairings), func(p pairing) bool { return p.a == name || p.b == name })
 }
 
 // fitTogether checks all stated correlations against each other.
@@ -205,8 +215,5 @@ func (s *Session) fitTogether() error {
 		return nil
 	}
 	_, err := s.inputsOf(nodes...)
-	if errors.Is(err, study.ErrCorrelation) {
-		return fmt.Errorf("these correlations do not fit together: %w", err)
-	}
 	return err
 }

@@ -22,6 +22,7 @@ type Value struct {
 	DoF       float64
 	Warnings  []string
 	sys       *units.System
+	chosen    bool // Unit fits the value; nobody asked for it
 }
 
 // Quantity returns the value with its dimension.
@@ -89,7 +90,7 @@ func (s *Session) value(si float64, t program.Type, unit *units.Unit, warnings [
 	if unit != nil {
 		v.Unit = *unit
 	} else {
-		v.Unit = s.display(si, t)
+		v.Unit, v.chosen = s.display(si, t), true
 	}
 	return v
 }

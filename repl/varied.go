@@ -18,28 +18,33 @@ type varied struct {
 	from, to float64
 }
 
-// vary reads the ends of a range and makes its name known to the checker: a
-// new name is local to the statement, one that exists is replaced for this run
-// and keeps its dimension and plane.
+// vary reads the ends of a range, which are what they are as the session stands,
+// and makes its name known to the checker: a new name is local to the statement,
+// one that exists is replaced for this run and keeps its dimension and plane.
 func (s *Session) vary(ctx context.Context, c *program.Checker, a syntax.Axis) (varied, error) {
 	v := varied{name: a.Name}
-	from, err := s.end(ctx, c, a.From)
+	fixed := s.checker(c.Source, "")
+	from, err := s.end(ctx, fixed, a.From)
 	if err != nil {
 		return v, err
 	}
-	to, err := s.end(ctx, c, a.To)
+	to, err := s.end(ctx, fixed, a.To)
 	if err != nil {
 		return v, err
 	}
-	if err := c.Comparable(a.From, a.To); err != nil {
+	if err := fixed.Comparable(a.From, a.To); err != nil {
 		return v, err
+	}
+	at := a.From.Span().Join(a.To.Span())
+	if from.value.SI == to.value.SI {
+		return v, syntax.Fail(at, "the two ends of this range are one place", "write two ends that differ, as in 1 nm .. 2 nm")
 	}
 	v.typ = from.typ
 	if v.typ.Plane == "" {
 		v.typ.Plane = to.typ.Plane
 	}
 	if v.typ.Kind != to.typ.Kind {
-		return v, syntax.Fail(a.From.Span().Join(a.To.Span()), "the ends of a range are both temperature points or both differences", "write both in degC, or both in K")
+		return v, syntax.Fail(at, "the ends of a range are both temperature points or both differences", "write both in degC, or both in K")
 	}
 	v.from, v.to, v.unit = from.value.SI, to.value.SI, to.value.Unit
 	return v, s.known(c, &v, a)
@@ -70,7 +75,7 @@ func (s *Session) end(ctx context.Context, c *program.Checker, x syntax.Expr) (e
 
 // known checks a varied name against a definition of that name.
 func (s *Session) known(c *program.Checker, v *varied, a syntax.Axis) error {
-	if _, ok := constants()[v.name]; ok {
+	if _, ok := s.constants[v.name]; ok {
 		return syntax.Fail(a.NameAt, v.name+" is a constant of the language", "choose another name")
 	}
 	d := s.store.defs[v.name]
@@ -81,17 +86,35 @@ func (s *Session) known(c *program.Checker, v *varied, a syntax.Axis) error {
 	if d.node == nil || d.node.Type.Kind != program.Number && d.node.Type.Kind != program.Point {
 		return syntax.Fail(a.NameAt, v.name+" is no single value that could be varied", "choose another name")
 	}
-	have := d.node.Type
-	if v.typ.Plane == "" {
-		v.typ.Plane = have.Plane
-	}
-	if have != v.typ {
-		return syntax.Fail(a.From.Span(), fmt.Sprintf("%s is %s; this range is %s", v.name, s.describe(have), s.describe(v.typ)), "give the range the dimension and plane of "+s.where(v.name)+", or use a new name")
+	have, given := d.node.Type, v.typ
+	var fits bool
+	if v.typ, fits = inPlaceOf(have, given); !fits {
+		return syntax.Fail(a.From.Span(), fmt.Sprintf("%s is %s; this range is %s", v.name, s.pointOr(have), s.pointOr(given)), "give the range the dimension and plane of "+s.where(v.name)+", or use a new name")
 	}
 	if d.unit != nil {
 		v.unit = *d.unit
 	}
 	return nil
+}
+
+// inPlaceOf is the type that a value has in the place of a definition's: it takes
+// over a plane when it states none, and kelvin count as a temperature point.
+func inPlaceOf(have, given program.Type) (t program.Type, fits bool) {
+	if given.Plane == "" {
+		given.Plane = have.Plane
+	}
+	if have.Kind == program.Point && given.Kind == program.Number {
+		given.Kind = program.Point
+	}
+	return given, given == have
+}
+
+// pointOr tells a temperature point from a difference.
+func (s *Session) pointOr(t program.Type) string {
+	if t.Kind == program.Point {
+		return "a temperature point"
+	}
+	return s.describe(t)
 }
 
 // formulas are expressions of a statement, checked, with the units in which

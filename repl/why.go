@@ -14,15 +14,11 @@ const whyLines = 60
 
 func (s *Session) why(j job) ([]Result, error) {
 	name := j.do.(*syntax.Command).Names[0]
-	if k, ok := constants()[name.Name]; ok {
+	if k, ok := s.constants[name.Name]; ok {
 		return []Result{&Text{content: []string{name.Name + " = " + k.text(s) + "  # " + k.doc}}}, nil
 	}
 	if s.store.defs[name.Name] == nil {
-		e := syntax.Fail(name.Where, name.Name+" is not defined", "names lists what is")
-		if near := s.near(name.Name); len(near) > 0 {
-			e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
-		}
-		return nil, e
+		return nil, s.undefined(name.Name, name.Where)
 	}
 	t := &tree{ctx: j.ctx, session: s, seen: map[string]bool{}}
 	t.grow(name.Name, 0)

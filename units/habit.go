@@ -48,7 +48,7 @@ rate                s⁻¹
 areal·density       m⁻² cm⁻²:0.001 µm⁻²:0.001 nm⁻²:0.001
 number·density      m⁻³ cm⁻³:0.001 µm⁻³:0.001 nm⁻³:0.001
 temperature         mK K:0.1
-1/temperature       ppm/K
+1/temperature       ppm/K K⁻¹:0.01
 amount·of·substance ~mol
 volume/time         mL/min L/min
 thermal·conductivity W/(m·K)

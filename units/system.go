@@ -7,7 +7,6 @@ import (
 	"slices"
 	"strings"
 	"sync"
-	"unicode"
 )
 
 // System is a set of units with the words for them and the habits of the
@@ -45,12 +44,10 @@ func (s *System) enter(r *row) {
 // having several, or when there are MaxDeclared.
 func (s *System) WithCounted(name string) (*System, Base, error) {
 	name = foldAll(name)
-	switch {
-	case name == "" || strings.ContainsFunc(name, func(r rune) bool { return !unicode.IsLetter(r) || !isSymbol(r) }):
-		return nil, 0, fmt.Errorf("%q is no name for a counted thing: it must be letters only", name)
-	case len(name) > maxName:
-		return nil, 0, fmt.Errorf("the name of a counted thing has at most %d bytes, this has %d", maxName, len(name))
-	case len(s.declared) == MaxDeclared:
+	if err := wordFor("a counted thing", name); err != nil {
+		return nil, 0, err
+	}
+	if len(s.declared) == MaxDeclared {
 		return nil, 0, fmt.Errorf("there are %d declared counted things, the most that fit", MaxDeclared)
 	}
 	for _, word := range []string{name, name + "s"} {
@@ -64,7 +61,7 @@ func (s *System) WithCounted(name string) (*System, Base, error) {
 	return grown, base, nil
 }
 
-// maxName bounds the name of a counted thing, so that a unit of several fits
+// maxName bounds the name of a counted thing or an own unit, so that a unit of several fits
 // the length of a unit.
 const maxName = 40
 

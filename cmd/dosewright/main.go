@@ -3,7 +3,8 @@
 //
 //	dosewright                                     the prompt; with a pipe, runs it as a session
 //	dosewright eval [--json] [--import FILE] 'statement' …
-//	dosewright replay [--json] [--update] FILE …
+//	dosewright replay [--json] [--step] [--update] [--outside] FILE …
+//	dosewright page FILE -o FILE.html
 //	dosewright help [topic]
 //	dosewright version
 //

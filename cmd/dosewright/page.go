@@ -3,6 +3,7 @@ package main
 import (
 	"bytes"
 	"context"
+	"errors"
 	"os"
 	"path/filepath"
 	"strings"
@@ -47,8 +48,7 @@ func makePage(ctx context.Context, args []string, std stdio) int {
 
 // pageTo writes the page whole or not at all.
 func pageTo(ctx context.Context, name, to string) error {
-	dir, base := filepath.Split(name)
-	c, err := config(filepath.Clean(dir))
+	c, base, err := configFor(name, false)
 	if err != nil {
 		return err
 	}
@@ -56,11 +56,11 @@ func pageTo(ctx context.Context, name, to string) error {
 	if err := page.Write(ctx, c, base, &b); err != nil {
 		return err
 	}
-	dir, base = filepath.Split(to)
+	dir, file := filepath.Split(to)
 	root, err := os.OpenRoot(filepath.Clean(dir))
 	if err != nil {
-		return err
+		return errors.New(dir + " cannot be opened: " + reason(err))
 	}
 	defer root.Close()
-	return writeWhole(root, base, b.Bytes())
+	return writeWhole(root, file, b.Bytes())
 }

@@ -96,22 +96,7 @@ func writeReplay(r *repl.Replayed, std stdio) {
 	for _, rec := range r.Records {
 		writeJSON(rec, std)
 	}
-	type change struct {
-		Name  string `json:"name"`
-		Was   string `json:"was"`
-		Now   string `json:"now"`
-		Alone string `json:"alone"`
-	}
 	for _, d := range r.Drifts {
-		moved := []change{}
-		for _, c := range d.MovedBy {
-			moved = append(moved, change{c.Name, c.Was, c.Now, c.Alone})
-		}
-		writeJSON(struct {
-			Line     int      `json:"line"`
-			Recorded []string `json:"recorded"`
-			Now      []string `json:"now"`
-			MovedBy  []change `json:"moved_by"`
-		}{d.Line, d.Was, d.Now, moved}, std)
+		writeJSON(d, std)
 	}
 }

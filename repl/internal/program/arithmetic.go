@@ -89,7 +89,7 @@ func (c *Checker) comparable(x, y syntax.Expr, a, b Type, verb string) error {
 	if a.Plane != b.Plane && a.Plane != "" && b.Plane != "" {
 		e := c.pair(x, y, fmt.Sprintf("%s and %s do not %s: they stand at different planes", c.describe(a), c.describe(b), verb),
 			fmt.Sprintf("carry(%s, CHAIN, %s) takes the second to the plane of the first", c.text(y.Span()), a.Plane))
-		e.Cause = ErrPlane
+		e.Cause = planesDiffer(verb, a.Plane, b.Plane)
 		return e
 	}
 	return nil
@@ -239,7 +239,7 @@ func (c *Checker) at(x *syntax.At) (*Node, error) {
 		return a, nil
 	case t.Plane != "":
 		return nil, &syntax.Error{
-			Marks: []syntax.Span{x.X.Span(), x.PlaneAt}, Cause: ErrPlane,
+			Marks: []syntax.Span{x.X.Span(), x.PlaneAt}, Cause: planesDiffer("move", t.Plane, p),
 			Msg:  fmt.Sprintf("%s stands at %s already; at %s would move it without a chain", c.text(x.X.Span()), t.Plane, p),
 			Hint: fmt.Sprintf("carry(%s, CHAIN, %s) takes it there", c.text(x.X.Span()), p),
 		}

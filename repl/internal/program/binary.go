@@ -16,6 +16,11 @@ func (c *compiler) binary(n *Node) operand {
 		return product([]int{x.place, y.place})
 	case n.op == opMul && x.product != nil && y.place >= 0:
 		return product(append(slices.Clip(x.product), y.place))
+	case n.op == opMul && y.raised != nil && y.scaled == nil:
+		return scaled(x.eval(), *y.raised)
+	case n.op == opMul && x.scaled != nil && y.place >= 0:
+		a, r, k := x.scaled, *x.raised, y.place
+		return closed(func(f *Frame) float64 { return a(f) * powInt(f.v[r.place], r.power) * f.v[k] })
 	case n.op == opAdd && len(x.product) == 2 && y.place >= 0:
 		i, j, k := x.product[0], x.product[1], y.place
 		return closed(func(f *Frame) float64 { return float64(f.v[i]*f.v[j]) + f.v[k] })
@@ -48,6 +53,14 @@ func product(places []int) operand {
 		}
 	}
 	return o
+}
+
+// raised is a place to a whole power greater than 0.
+type raised struct{ place, power int }
+
+// scaled multiplies by a power of a place, which a further factor may join.
+func scaled(a eval, r raised) operand {
+	return operand{place: -1, scaled: a, raised: &r, run: func(f *Frame) float64 { return a(f) * powInt(f.v[r.place], r.power) }}
 }
 
 func onPlaces(o op, i, j int) eval {

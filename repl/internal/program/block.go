@@ -149,14 +149,14 @@ func (b *blocks) loopOf(n *Node) *lane {
 		return b.loop(to, b.sum(to, n))
 	case opNeg, opSub, opDiv, opPower, opPow, opCall:
 		for _, a := range n.args {
-			args = append(args, b.emit(a))
+			args = append(args, b.items(a)...)
 		}
 	default:
 		b.single = true // branches are computed only where they are taken
 		return &lane{fixed: true}
 	}
 	for _, a := range n.args {
-		if a.Type.Kind == List || a.Type.Kind == ChainKind || a.Type.Kind == BodyKind {
+		if a.Type.Kind == ChainKind || a.Type.Kind == BodyKind {
 			b.single = true
 			return &lane{fixed: true}
 		}
@@ -168,4 +168,17 @@ func (b *blocks) loop(to *lane, run func(n int) bool) *lane {
 	to.row = make([]float64, Lanes)
 	b.loops = append(b.loops, run)
 	return to
+}
+
+// items makes the loops of a list's items, or of the value itself.
+func (b *blocks) items(n *Node) []*lane {
+	list, input := b.follow(n)
+	if input != nil || list.op != opList {
+		return []*lane{b.emit(n)}
+	}
+	var all []*lane
+	for _, item := range list.args {
+		all = append(all, b.emit(item))
+	}
+	return all
 }

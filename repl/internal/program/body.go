@@ -36,7 +36,7 @@ func (c *Checker) Quantity(x syntax.Expr, want units.Dimension, what string) (*N
 	}
 	if n.Type.Kind != Number || n.Type.Dim != want || n.Type.Plane != "" {
 		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: what + " is " + c.quantity(want) + ", not " + c.describe(n.Type),
-			Hint: "give it in " + c.Scope.Units().UnitText(want), Cause: units.ErrDimension}
+			Hint: "give it in " + c.Scope.Units().UnitText(want), Cause: Differ("take", n.Type, Type{Dim: want})}
 	}
 	return n, nil
 }

@@ -258,7 +258,7 @@ func (c *Checker) fits(f *Function, p Param, n *Node, x syntax.Expr) error {
 	}
 	if p.Plane != "" && t.Plane != "" && p.Plane != t.Plane {
 		return &syntax.Error{
-			Marks: []syntax.Span{x.Span()}, Cause: ErrPlane,
+			Marks: []syntax.Span{x.Span()}, Cause: planesDiffer("take", t.Plane, p.Plane),
 			Msg:  fmt.Sprintf("%s of %s stands at %s, and %s stands at %s", p.Name, f.Name, p.Plane, c.text(x.Span()), t.Plane),
 			Hint: c.planeWayOn(x, p.Plane, t),
 		}

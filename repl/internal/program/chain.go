@@ -144,6 +144,9 @@ func (c *Checker) independent(s Step, line syntax.BlockLine) (Step, error) {
 			return s, syntax.Fail(line.Where, "independent elements are counted by a number up to 64", "write "+s.Label+" x4 independent: …")
 		}
 	}
+	if own := Uncertain(s.Factor, func(string) bool { return false }); !own && len(c.Uses) > 0 {
+		return s, syntax.Fail(line.Items[0].Span(), "each crossing has an error of its own only when the uncertain value stands in this line; a name is one source of error", "write "+s.Label+" x4 independent: (66.0 ± 0.5) %")
+	}
 	one := s
 	one.Crossings = nil
 	s.All = passing(one)
@@ -178,7 +181,7 @@ func passing(s Step) *Node {
 	label := s.Label
 	f := &Function{Name: label, Call: func(x []float64) (float64, []string, error) {
 		if !(x[0] >= 0 && x[0] <= 1) {
-			return 0, nil, fmt.Errorf("%s is %s; the factor of an element lies between 0 and 1", label, units.FormatNumber(x[0], 5))
+			return 0, nil, fmt.Errorf("%s is %s; the factor of an element lies between 0 and 1", label, besideOne(x[0]))
 		}
 		if len(x) == 1 {
 			return x[0], nil, nil
@@ -189,6 +192,15 @@ func passing(s Step) *Node {
 		return powInt(x[0], int(x[1])), nil, nil
 	}}
 	return &Node{op: opCall, fn: f, args: args, At: s.Factor.At, Owner: s.Factor.Owner}
+}
+
+// besideOne writes a number that is not 1 so that it does not look like it.
+func besideOne(x float64) string {
+	text := units.FormatNumber(x, 5)
+	if text == units.FormatNumber(1, 5) {
+		return units.FormatNumber(x, 16)
+	}
+	return text
 }
 
 func (c *Checker) reduction(s Step, line syntax.BlockLine) (Step, error) {

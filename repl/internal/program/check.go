@@ -2,6 +2,7 @@ package program
 
 import (
 	"fmt"
+	"maps"
 	"math/big"
 	"slices"
 	"strings"
@@ -124,12 +125,14 @@ func (c *Checker) check(x syntax.Expr) (*Node, error) {
 
 // Local gives a name a type for this statement alone; whoever runs the program
 // fills it as an input.
-func (c *Checker) Local(name string, t Type) {
-	locals := map[string]*Node{name: {op: opRef, name: name, Type: t}}
-	for k, v := range c.locals {
-		if k != name {
-			locals[k] = v
-		}
+func (c *Checker) Local(name string, t Type) { c.Locals(map[string]Type{name: t}) }
+
+// Locals is Local for several names.
+func (c *Checker) Locals(types map[string]Type) {
+	locals := make(map[string]*Node, len(c.locals)+len(types))
+	maps.Copy(locals, c.locals)
+	for name, t := range types {
+		locals[name] = &Node{op: opRef, name: name, Type: t}
 	}
 	c.locals = locals
 }
@@ -212,6 +215,8 @@ func (c *Checker) unknown(x *syntax.Name) error {
 		e.Msg, e.Hint = name+" is a function; it takes its arguments in parentheses", "see: help "+name
 	} else if near := c.Scope.Near(name); len(near) > 0 {
 		e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
+	} else if n, _ := c.Scope.Material(name); n != nil {
+		e.Msg, e.Hint = name+" is a material, not a value", "reflectivity("+name+", 13.5 nm) and attenuation("+name+") ask it"
 	} else if _, err := c.Scope.Units().Parse(name); err == nil {
 		e.Msg, e.Hint = name+" is a unit, and a unit stands right behind a number", "write 1 "+name
 	} else if c.knownPlane(Plane(name)) {
@@ -231,7 +236,7 @@ func (c *Checker) list(x *syntax.List) (*Node, error) {
 			n.Type = Type{Kind: List, Dim: a.Type.Dim, Plane: a.Type.Plane, Points: a.Type.Kind == Point}
 		} else if first := n.args[0].Type; a.Type != first {
 			e := c.pair(x.Items[0], item, "a list holds one dimension at one plane: "+c.describe(first)+" and "+c.describe(a.Type)+" do not mix", "make two lists of it")
-			e.Cause = units.ErrDimension
+			e.Cause = Differ("list", first, a.Type)
 			return nil, e
 		}
 		n.args = append(n.args, a)

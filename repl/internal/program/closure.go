@@ -17,7 +17,7 @@ func (c *compiler) closure(n *Node) operand {
 	case opAdd, opSub, opMul, opDiv:
 		return c.binary(n)
 	case opPower:
-		return closed(c.power(n))
+		return c.power(n)
 	case opPow:
 		return closed(c.pow(n))
 	case opIf:

@@ -180,7 +180,9 @@ type operand struct {
 	place   int // −1 when it has none
 	value   float64
 	fixed   bool
-	product []int // places that the closure multiplies
+	product []int   // places that the closure multiplies
+	raised  *raised // power of a place that the closure is, or by which it multiplies scaled
+	scaled  eval
 }
 
 func closed(run eval) operand { return operand{run: run, place: -1} }

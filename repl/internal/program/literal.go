@@ -16,6 +16,10 @@ func (c *Checker) literal(x *syntax.Literal) (*Node, error) {
 		return nil, c.nameBehind(x, err)
 	}
 	c.nameShadowed(x)
+	if strings.Trim(x.Unit, "%ppmb°deg^²³⁻0123456789-") == "" && strings.ContainsAny(x.Unit, "^²³⁻23") && unit.Dimension().IsNumber() {
+		symbol := strings.TrimRight(x.Unit, "^²³⁻¹0123456789-")
+		return nil, syntax.Fail(x.Where, "the power belongs to the unit here: "+c.text(x.Where)+" is "+x.Number+" times "+symbol+" raised", "write ("+x.Number+" "+symbol+") and the power behind the parenthesis")
+	}
 	number, concise, uncertain := units.SplitConcise(x.Number)
 	v, err := unit.Read(number)
 	if err != nil {
@@ -126,6 +130,9 @@ func (c *Checker) StatedUnit(s *syntax.Stated, n *Node, x syntax.Expr) (units.Un
 	if t.Kind == Text || t.Kind == ChainKind {
 		return u, syntax.Fail(s.Where, c.describe(t)+" has no unit to be stated in", "leave the bracket out")
 	}
+	if u.Point() && t.Kind == Number && t.Dim == u.Dimension() {
+		return u, syntax.Fail(s.Where, "a temperature difference has no place on the scale of "+u.String(), "state it in K")
+	}
 	if u.Dimension() != t.Dim && s.Unit != "" {
 		return u, c.misstated(s, u, t, x)
 	}
@@ -143,13 +150,13 @@ func (c *Checker) StatedUnit(s *syntax.Stated, n *Node, x syntax.Expr) (units.Un
 			msg = "the answer has no plane; a bracket requires one, it never attaches one"
 			hint = "say where an input stands: " + "x at " + string(p)
 		}
-		return u, syntax.Fail(s.Where, msg, hint)
+		return u, &syntax.Error{Marks: []syntax.Span{s.Where}, Msg: msg, Hint: hint, Cause: planesDiffer("state", t.Plane, p)}
 	}
 	return u, nil
 }
 
 func (c *Checker) misstated(s *syntax.Stated, u units.Unit, t Type, x syntax.Expr) error {
-	e := &syntax.Error{Marks: []syntax.Span{x.Span(), s.Where}, Cause: units.ErrDimension}
+	e := &syntax.Error{Marks: []syntax.Span{x.Span(), s.Where}, Cause: &units.DimensionError{Op: "state", Have: t.Dim, Rhs: u.Dimension()}}
 	if lit, ok := x.(*syntax.Literal); ok && lit.Unit == "" {
 		e.Msg = "a bracket states the unit of an answer, it never gives one: " + c.text(x.Span()) + " is a pure number"
 		e.Hint = "write " + c.text(x.Span()) + " " + s.Unit

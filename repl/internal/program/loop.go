@@ -144,13 +144,17 @@ func raise(to, x *lane, p float64) func(int) bool {
 			return true
 		}
 	}
+	power := realPower
+	if p == 0.5 {
+		power = func(x, _ float64) float64 { return math.Sqrt(x) }
+	}
 	return func(n int) bool {
 		a, out := x.rows(n), to.row[:n]
 		for i, v := range a {
 			if v == 0 && p < 0 || v-v != 0 {
 				return false
 			}
-			if out[i] = realPower(v, p); out[i]-out[i] != 0 {
+			if out[i] = power(v, p); out[i]-out[i] != 0 {
 				return false
 			}
 		}

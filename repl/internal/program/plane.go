@@ -155,8 +155,11 @@ func (c *Checker) plane(text string) (Plane, error) {
 	return Plane(over).times(Plane(under), -1), nil
 }
 
+// KnownPlane says whether a name is a plane in every session.
+func KnownPlane(name string) bool { return slices.Contains(knownPlanes[:], Plane(name)) }
+
 func (c *Checker) knownPlane(p Plane) bool {
-	return slices.Contains(knownPlanes[:], p) || slices.Contains(c.Scope.Planes(), p)
+	return KnownPlane(string(p)) || slices.Contains(c.Scope.Planes(), p)
 }
 
 func (c *Checker) planesHint() string {

@@ -3,13 +3,16 @@ package program
 import "math"
 
 // power compiles a constant exponent: whole ones by multiplication.
-func (c *compiler) power(n *Node) eval {
+func (c *compiler) power(n *Node) operand {
 	x, p := c.emit(n.args[0]), n.value
 	if x.place >= 0 && isWhole(p) && p > 0 {
-		i, k := x.place, int(p)
-		return func(f *Frame) float64 { return powInt(f.v[i], k) }
+		r := raised{x.place, int(p)}
+		return operand{place: -1, raised: &r, run: func(f *Frame) float64 { return powInt(f.v[r.place], r.power) }}
 	}
-	a := x.eval()
+	return closed(powerOf(n, x.eval(), p))
+}
+
+func powerOf(n *Node, a eval, p float64) eval {
 	switch {
 	case p == 2:
 		return func(f *Frame) float64 { x := a(f); return x * x }

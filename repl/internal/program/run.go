@@ -79,7 +79,9 @@ func (p *Program) RunOne(f *Frame, inputs, out []float64, k int) error {
 // start fills the inputs and computes what is shared.
 func (p *Program) start(f *Frame, inputs []float64) error {
 	copy(f.v[:len(p.Inputs)+len(p.Sources)], inputs)
-	f.err = nil
+	if f.err != nil {
+		f.err = nil
+	}
 	f.run++
 	for _, s := range p.steps {
 		f.v[s.place] = s.run(f)
@@ -96,9 +98,13 @@ func (p *Program) value(f *Frame, i int) (float64, error) {
 		return 0, f.err
 	}
 	if x-x != 0 {
-		return 0, &RunError{Node: p.nodes[i], Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
+		return 0, outOfRange(p.nodes[i])
 	}
 	return x, nil
+}
+
+func outOfRange(n *Node) error {
+	return &RunError{Node: n, Err: fmt.Errorf("the result leaves the range of floating point, about 1e308: %w", ErrNotFinite)}
 }
 
 // fail keeps the first error of a run.

@@ -37,13 +37,15 @@ func (c *Checker) source(v float64, t Type, s Spread, at syntax.Span) *Node {
 	return c.made(Node{op: opSource, value: v, spread: &s, Type: t}, at)
 }
 
-// Source returns the uncertain input that a formula is, with a plane or
-// another type at most: its value and spread; ok is false for all else.
-func Source(n *Node) (input *Node, ok bool) {
-	for n.op == opSame {
-		n = n.args[0]
+// Source returns the uncertain input that a formula is, with a plane, another
+// type or a minus (sign −1) at most; ok is false for all else.
+func Source(n *Node) (input *Node, sign float64, ok bool) {
+	for sign = 1; n.op == opSame || n.op == opNeg; n = n.args[0] {
+		if n.op == opNeg {
+			sign = -sign
+		}
 	}
-	return n, n.op == opSource
+	return n, sign, n.op == opSource
 }
 
 // Spread returns what is known of an uncertain input; nil for other nodes.
@@ -67,6 +69,9 @@ func (c *Checker) spread(x *syntax.Literal, unit units.Unit, v float64, concise 
 	var s Spread
 	var err error
 	switch at := x.Spread; {
+	case at != nil && at.Number == "" && concise == "":
+		number := strings.TrimSpace(x.Number + " " + x.Unit)
+		return s, syntax.Fail(x.Where, "no uncertainty stands here of which this could be said", fmt.Sprintf("write it behind ±: %s ± 2 %% (%s=%s)", number, at.Says[0].Name, at.Says[0].Number))
 	case at == nil || at.Number == "":
 		s.U, err = unit.ReadDifference(concise)
 	case concise != "":
@@ -108,14 +113,14 @@ func (c *Checker) spreadWithUnit(x *syntax.Literal, unit units.Unit, v float64) 
 	case ratioUnit(own) && ratioUnit(unit):
 		return 0, syntax.Fail(x.Where, fmt.Sprintf("± %s %s can be meant of the value or in points of %s", at.Number, at.Unit, x.Unit),
 			fmt.Sprintf("write (%s ± %s) %s for points, or %s ± %s %s for a part of the value",
-				x.Number, at.Number, x.Unit, strconv.FormatFloat(v, 'g', -1, 64), at.Number, at.Unit))
+				x.Number, strconv.FormatFloat(unit.FromDifference(u), 'g', -1, 64), x.Unit, strconv.FormatFloat(v, 'g', -1, 64), at.Number, at.Unit))
 	case ratioUnit(own) && unit.Point():
 		return 0, syntax.Fail(at.Where, "a percentage of a temperature point has no meaning", "write the uncertainty in K: "+x.Number+" "+x.Unit+" ± 0.5 K")
 	case ratioUnit(own):
 		return u * math.Abs(v), nil
 	case own.Dimension() != unit.Dimension():
 		e := syntax.Fail(at.Where, "the uncertainty is "+c.quantity(own.Dimension())+", the value "+c.quantity(unit.Dimension()), "write it in "+x.Unit+", or as a percentage of the value")
-		e.Cause = units.ErrDimension
+		e.Cause = &units.DimensionError{Op: "compare", Have: own.Dimension(), Rhs: unit.Dimension()}
 		return 0, e
 	}
 	return u, nil
@@ -134,10 +139,10 @@ func (c *Checker) says(at *syntax.Spread, s *Spread) error {
 			k = v
 		case a.Name == "p" && v > 0 && v < 1 && p == 0:
 			p = v
-		case a.Name == "nu" && v > 0 && s.DoF == 0:
+		case a.Name == "nu" && v >= leastDoF && v <= mostDoF && s.DoF == 0:
 			s.DoF = v
 		default:
-			return syntax.Fail(a.Where, strings.TrimSpace(a.Name+" = "+a.Number+" "+a.Unit)+" says nothing here", "k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once")
+			return syntax.Fail(a.Where, strings.TrimSpace(a.Name+" = "+a.Number+" "+a.Unit)+" says nothing here", "k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once")
 		}
 	}
 	switch {
@@ -205,3 +210,9 @@ func (c *Checker) Distribution(shape Shape, k *Call) (*Node, error) {
 	}
 	return c.source(x+(y-x)/2, t, s, k.Tree.Where), nil
 }
+
+// Between these degrees of freedom a t-distribution is more than rounding.
+const (
+	leastDoF = 0.5
+	mostDoF  = 1e9
+)

@@ -12,23 +12,23 @@ import (
 // An uncertain literal is one source with a standard uncertainty in SI units.
 func TestSpreads(t *testing.T) {
 	for text, want := range map[string]string{
-		"13.50(2) nm":                    "1.35000e-8 ± 2.00000e-11",
-		"13.50(12) nm":                   "1.35000e-8 ± 1.20000e-10",
-		"13.50(0.02) nm":                 "1.35000e-8 ± 2.00000e-11",
-		"1.6(2)e-27 kg":                  "1.60000e-27 ± 2.00000e-28",
-		"30 mJ/cm^2 ± 2 %":               "300 ± 6",
-		"30 mJ/cm^2 ± 0.6 mJ/cm^2":       "300 ± 6",
-		"30 mJ/cm^2 ± 6 J/m^2":           "300 ± 6",
-		"(30 ± 0.6) mJ/cm^2":             "300 ± 6",
-		"(66.0 ± 0.5) %":                 "0.660000 ± 0.00500000",
-		"0.66 ± 1 %":                     "0.660000 ± 0.00660000",
-		"1 ± 0.1":                        "1 ± 0.100000",
-		"22 degC ± 0.5 K":                "295.150 ± 0.500000",
-		"-5.0(2) degC":                   "268.150 ± 0.200000",
-		"100 W ± 3 % (k=2)":              "100 ± 1.50000",
-		"100.0(30) W (k=2)":              "100 ± 1.50000",
-		"(100 ± 3) W (k=2, nu=4)":        "100 ± 1.50000 with 4",
-		"100 W ± 3 W (p=95.45 %)":        "100 ± 1.50000",        // k = 2.000 for a normal distribution, from memory
+		"13.50(2) nm":                       "1.35000e-8 ± 2.00000e-11",
+		"13.50(12) nm":                      "1.35000e-8 ± 1.20000e-10",
+		"13.50(0.02) nm":                    "1.35000e-8 ± 2.00000e-11",
+		"1.6(2)e-27 kg":                     "1.60000e-27 ± 2.00000e-28",
+		"30 mJ/cm^2 ± 2 %":                  "300 ± 6",
+		"30 mJ/cm^2 ± 0.6 mJ/cm^2":          "300 ± 6",
+		"30 mJ/cm^2 ± 6 J/m^2":              "300 ± 6",
+		"(30 ± 0.6) mJ/cm^2":                "300 ± 6",
+		"(66.0 ± 0.5) %":                    "0.660000 ± 0.00500000",
+		"0.66 ± 1 %":                        "0.660000 ± 0.00660000",
+		"1 ± 0.1":                           "1 ± 0.100000",
+		"22 degC ± 0.5 K":                   "295.150 ± 0.500000",
+		"-5.0(2) degC":                      "268.150 ± 0.200000",
+		"100 W ± 3 % (k=2)":                 "100 ± 1.50000",
+		"100.0(30) W (k=2)":                 "100 ± 1.50000",
+		"(100 ± 3) W (k=2, nu=4)":           "100 ± 1.50000 with 4",
+		"100 W ± 3 W (p=95.45 %)":           "100 ± 1.50000",        // k = 2.000 for a normal distribution, from memory
 		"100 W ± 2.776445 W (p=95 %, nu=4)": "100 ± 1.00000 with 4", // t of JCGM 100:2008, table G.2: 2.78, more digits from memory
 	} {
 		d := newDesk()
@@ -37,7 +37,7 @@ func TestSpreads(t *testing.T) {
 			t.Errorf("%s: %s", text, d.refusal(text, err))
 			continue
 		}
-		n, ok := Source(a.node)
+		n, _, ok := Source(a.node)
 		if !ok {
 			t.Errorf("%s is no source", text)
 			continue
@@ -53,19 +53,19 @@ func TestSpreads(t *testing.T) {
 	d := newDesk()
 	holds(t, d, `
 66 % ± 0.5 % ! 66 % ± 0.5 %: ± 0.5 % can be meant of the value or in points of %; write (66 ± 0.5) % for points, or 0.66 ± 0.5 % for a part of the value
-66 % ± 5 ppm ! 66 % ± 5 ppm: ± 5 ppm can be meant of the value or in points of %; write (66 ± 5) % for points, or 0.66 ± 5 ppm for a part of the value
+66 % ± 5 ppm ! 66 % ± 5 ppm: ± 5 ppm can be meant of the value or in points of %; write (66 ± 0.0005) % for points, or 0.66 ± 5 ppm for a part of the value
 30 mJ/cm^2 ± 0.6 ! ± 0.6: the uncertainty has no unit; write 30 mJ/cm^2 ± 0.6 mJ/cm^2, or (30 ± 0.6) mJ/cm^2
 30 mJ/cm^2 ± 0.6 W ! ± 0.6 W: the uncertainty is power (W), the value fluence (mJ/cm²); write it in mJ/cm^2, or as a percentage of the value
 22 degC ± 2 % ! ± 2 %: a percentage of a temperature point has no meaning; write the uncertainty in K: 22 degC ± 0.5 K
 13.5(2) nm ± 3 nm ! ± 3 nm: the uncertainty stands twice; write 13.50(2) nm or 13.50 nm ± 0.02 nm
-1 ± 0.1 (k=0) ! k=0: k = 0 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once
-1 ± 0.1 (p=100 %) ! p=100: p = 100 % says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once
-1 ± 0.1 (k=2, k=2) ! k=2: k = 2 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once
+1 ± 0.1 (k=0) ! k=0: k = 0 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
+1 ± 0.1 (p=100 %) ! p=100: p = 100 % says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
+1 ± 0.1 (k=2, k=2) ! k=2: k = 2 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
 1 ± 0.1 (k=2, p=95 %) ! ± 0.1: k and p both say how far the uncertainty is expanded; give one of them
-1 ± 0.1 (q=2) ! q=2: q = 2 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once
+1 ± 0.1 (q=2) ! q=2: q = 2 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
 1 ± 0.1 (k=2 m) ! k=2: k is a pure number; write (k=2), (p=95 %) or (nu=4)
-1 ± 0.1 (nu=0) ! nu=0: nu = 0 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom; each once
-1 ± 0.1 (p=95 %, nu=1e-300) ! ± 0.1: the uncertainty leaves the range of floating point; give a coverage and degrees of freedom that measurements have
+1 ± 0.1 (nu=0) ! nu=0: nu = 0 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
+1 ± 0.1 (p=95 %, nu=1e-300) ! nu=1e-300: nu = 1e-300 says nothing here; k is a factor above 0, p a probability such as 95 %, nu the degrees of freedom, from 0.5 to 1e9; each once
 1 ± 1e300 (k=1e-300) ! ± 1e300: the uncertainty leaves the range of floating point; give a coverage and degrees of freedom that measurements have
 1 ± 1e400 ! 1 ± 1e400: this uncertainty: the number is larger than 1.8e308 in SI units; choose a unit that brings the number closer to one
 `)
@@ -77,7 +77,7 @@ func number(v float64) string { return units.FormatNumber(v, 6) }
 func TestSourcesAreInputs(t *testing.T) {
 	d := newDesk()
 	holds(t, d, "x = 3 ± 0.1\ny = x*x - 9\nz = 2 ± 0.2")
-	p, err := Compile(checked(t, d, "(x - x) + y*z"), d.resolve)
+	p, err := CompileAll([]*Node{checked(t, d, "(x - x) + y*z")}, d.resolve, Opening{Sources: true})
 	if err != nil {
 		t.Fatal(err)
 	}

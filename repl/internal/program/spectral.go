@@ -157,7 +157,7 @@ func (b *nestedBlock) answer(f *Frame, sp *spectral, center, width float64) (flo
 		}
 	}
 	if !(center > 0) || !(width >= 0) || width >= 2*center {
-		return 0, fmt.Errorf("the band has its centre at %s and the width %s", units.New(center, units.DimensionOf[units.Length]()), units.New(width, units.DimensionOf[units.Length]()))
+		return 0, fmt.Errorf("the band has its centre at %s and the width %s; a width is 0 or greater and less than twice the centre", units.New(center, units.DimensionOf[units.Length]()), units.New(width, units.DimensionOf[units.Length]()))
 	}
 	switch {
 	case sp.read != nil:

@@ -39,6 +39,7 @@ func FirstOrder(ctx context.Context, f Eval, s *Sources) (*Budget, error) {
 		return nil, err
 	}
 	b := &Budget{Value: value}
+	noise := f.noise(s, value)
 	parts := make([]float64, len(x)) // C·u(x) of every slot, signed
 	for slot, in := range s.inputs {
 		if !in.uncertain() {
@@ -51,6 +52,9 @@ func FirstOrder(ctx context.Context, f Eval, s *Sources) (*Budget, error) {
 		if err != nil {
 			return nil, err
 		}
+		if math.Abs(c*in.U) <= aboveNoise*noise {
+			c = 0 // what rounding leaves of inputs that cancel
+		}
 		parts[slot] = c * in.U
 		b.Rows = append(b.Rows, Contribution{Slot: slot, C: c, U: math.Abs(parts[slot]), OneSided: oneSided})
 	}
@@ -58,7 +62,7 @@ func FirstOrder(ctx context.Context, f Eval, s *Sources) (*Budget, error) {
 	if !finite(b.U * b.U) {
 		return nil, ErrNotFinite
 	}
-	b.Second, err = f.secondOrder(ctx, s, b)
+	b.Second, err = f.secondOrder(ctx, s, b, noise)
 	return b, err
 }
 

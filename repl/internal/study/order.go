@@ -2,6 +2,7 @@ package study
 
 import (
 	"context"
+	"fmt"
 	"runtime"
 )
 
@@ -34,7 +35,7 @@ func inOrder[T any](ctx context.Context, n int, start func() func(int, *T) error
 			for c := range jobs {
 				err := ctx.Err()
 				if err == nil {
-					err = work(c.index, &c.data)
+					err = guarded(work, c)
 				}
 				c.done <- err
 			}
@@ -65,7 +66,25 @@ func inOrder[T any](ctx context.Context, n int, start func() func(int, *T) error
 	for range workers {
 		<-ended
 	}
+	if f, ok := err.(*fault); ok {
+		panic(f.value)
+	}
 	return err
+}
+
+// fault is a panic of a worker on its way to the caller's goroutine, where the
+// host may recover from it.
+type fault struct{ value any }
+
+func (f *fault) Error() string { return fmt.Sprint(f.value) }
+
+func guarded[T any](work func(int, *T) error, c *chunk[T]) (err error) {
+	defer func() {
+		if r := recover(); r != nil {
+			err = &fault{r}
+		}
+	}()
+	return work(c.index, &c.data)
 }
 
 // collect takes the chunks in order until one fails or the queue ends.

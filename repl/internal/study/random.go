@@ -7,20 +7,40 @@ import (
 
 // stream draws random numbers for one chunk after the other.
 type stream struct {
-	*rand.Rand
-	pcg *rand.PCG
+	*rand.Rand // over the generator
+	generator  *generator
+	ziggurat   *ziggurat
 }
 
 func newStream() stream {
-	pcg := new(rand.PCG)
-	return stream{rand.New(pcg), pcg}
+	g := &generator{a: 1}
+	return stream{rand.New(g), g, newZiggurat()}
 }
 
 // begin puts the stream at the start of a chunk. Seed and chunk are scrambled,
-// since the generator's states that lie a small number apart give numbers that
-// are alike.
+// so that streams which lie a small number apart have nothing in common.
 func (s stream) begin(seed, chunk uint64) {
-	s.pcg.Seed(scramble(seed), scramble(scramble(seed)+chunk))
+	x := scramble(scramble(seed) + chunk)
+	*s.generator = generator{scramble(x), scramble(x + 1), scramble(x + 2), scramble(x + 3)}
+}
+
+// generator is the state of xoshiro256++, not all zero (Blackman, Vigna, Scrambled
+// linear pseudorandom number generators, ACM Trans. Math. Softw. 47(4), 36 (2021);
+// from memory). It is short enough to be compiled into a loop.
+type generator struct{ a, b, c, d uint64 }
+
+// Uint64 makes a rand.Source of it.
+func (g *generator) Uint64() uint64 {
+	sum := g.a + g.d
+	out := (sum<<23 | sum>>41) + g.a
+	t := g.b << 17
+	g.c ^= g.a
+	g.d ^= g.b
+	g.b ^= g.c
+	g.a ^= g.d
+	g.c ^= t
+	g.d = g.d<<45 | g.d>>19
+	return out
 }
 
 // scramble is the output function of SplitMix64 (Steele, Lea, Flood, Fast
@@ -32,16 +52,11 @@ func scramble(x uint64) uint64 {
 	return x ^ x>>31
 }
 
-func (s stream) normals(row []float64) {
-	for i := range row {
-		row[i] = s.NormFloat64()
-	}
-}
-
 // normal draws from N(m, u²).
 func (s stream) normal(row []float64, m, u float64) {
-	for i := range row {
-		row[i] = m + u*s.NormFloat64()
+	s.normals(row)
+	for i, z := range row {
+		row[i] = m + u*z
 	}
 }
 

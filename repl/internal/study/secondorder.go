@@ -52,7 +52,7 @@ func (s *Sources) directions() []*direction {
 	return all
 }
 
-func (f Eval) secondOrder(ctx context.Context, s *Sources, b *Budget) (SecondOrder, error) {
+func (f Eval) secondOrder(ctx context.Context, s *Sources, b *Budget, noise float64) (SecondOrder, error) {
 	w := wander{f: f, base: s.Values(), at: s.Values(), mid: b.Value}
 	directions := s.directions()
 	if len(directions) > mostDirection {
@@ -75,8 +75,7 @@ func (f Eval) secondOrder(ctx context.Context, s *Sources, b *Budget) (SecondOrd
 	}
 	r := SecondOrder{U: math.Sqrt(math.Max(0, square)), Shift: shift}
 	change := math.Max(math.Abs(r.U-b.U), math.Abs(r.Shift))
-	rounding := 0x1p-46 * math.Abs(b.Value)
-	r.Matters = change > matters*math.Max(r.U, b.U) && change > rounding
+	r.Matters = change > matters*math.Max(r.U, b.U) && change > aboveSecond*noise
 	return r, nil
 }
 

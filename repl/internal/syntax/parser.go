@@ -118,6 +118,8 @@ func (p *parser) finish() {
 	}
 	text := Visible(p.tok.Text)
 	switch {
+	case p.is("±") && p.prev.End > 0 && !strings.Contains(p.scan.src[:p.prev.End], "±"):
+		p.fail(Fail(p.tok.Span, "± stands right behind its number and unit, before at", "write 250 W ± 3 % at IF, or (a ± b) W"))
 	case p.is(")"), p.is("}"):
 		p.fail(Fail(p.tok.Span, "nothing is open that "+text+" would close", "leave it out, or open it before"))
 	case p.tok.Kind == Bracket:

@@ -1,0 +1,5 @@
+//go:build race
+
+package repl_test
+
+const raceDetected = true
