@@ -4,7 +4,6 @@ import (
 	_ "embed"
 	"encoding/binary"
 	"math"
-	"slices"
 	"sync"
 
 	"example.com/dosewright/units"
@@ -47,16 +46,6 @@ var elements = sync.OnceValue(func() map[string]*element {
 	}
 	return all
 })
-
-// elementSymbols lists the symbols of the tables in alphabetical order.
-func elementSymbols() []string {
-	var out []string
-	for symbol := range elements() {
-		out = append(out, symbol)
-	}
-	slices.Sort(out)
-	return out
-}
 
 // unpacker reads the packed tables from the front.
 type unpacker struct{ rest []byte }

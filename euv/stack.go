@@ -188,12 +188,16 @@ func sortedOnce(list []units.Length) []units.Length {
 	return slices.Compact(list)
 }
 
-// clampUnit brings what left 0…1 by rounding back; what left it by more is no
-// answer of the model.
+// clampUnit brings what left 0…1 by rounding back; what left it by more, or is
+// no number, is no answer of the model.
 func clampUnit(what string, v units.Ratio) (units.Ratio, error) {
 	const rounding = 1e-9
-	if !(v >= -rounding && v <= 1+rounding) {
-		return 0, outside(what, v, "between 0 and 1: here a roughness is too large for the Névot–Croce factor, or an index too strange")
+	const reason = "here a roughness is too large for the Névot–Croce factor, or an index too strange"
+	switch {
+	case !isFinite(v):
+		return 0, &BodyError{Body: "this body", Asked: what, Why: reason}
+	case v < -rounding || v > 1+rounding:
+		return 0, outside(what, v, "between 0 and 1: "+reason)
 	}
 	return min(max(v, 0), 1), nil
 }

@@ -252,8 +252,15 @@ func TestTypedErrors(t *testing.T) {
 	}
 	_, err := s.Check(t.Context(), "P > P_IF")
 	wants(t, "check", err, repl.ErrPlane, "P")
+	_, err = s.Check(t.Context(), "dose = 30 mJ/cm^2 within 1 nm")
+	wants(t, "check within", err, units.ErrDimension, "1 nm")
 	_, err = s.Sweep(t.Context(), "x = 1 nm .. 2 W 3 points : x")
 	wants(t, "sweep", err, units.ErrDimension, "1 nm")
+	_, err = s.Sweep(t.Context(), "dose = 1 nm .. 2 nm 3 points : wph")
+	wants(t, "sweep of a name", err, units.ErrDimension, "1 nm")
+	_, err = s.Sweep(t.Context(), "P = 1 W at IF .. 2 W at IF 3 points : P")
+	wants(t, "sweep at a plane", err, repl.ErrPlane, "1 W at IF")
+	wants(t, "case", s.Define(t.Context(), "case odd : dose = 3 W"), units.ErrDimension, "3 W")
 }
 
 func wants(t *testing.T, text string, err, cause error, mark string) {

@@ -10,6 +10,7 @@ import (
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
+	"example.com/dosewright/units"
 )
 
 func wordRune(r rune) bool { return unicode.IsLetter(r) || unicode.IsDigit(r) || r == '_' }
@@ -32,6 +33,9 @@ func (s *Session) offers(text string) (int, []string) {
 	}
 	if open := strings.LastIndexByte(text, '['); open > strings.LastIndexByte(text, ']') {
 		return s.unitOffers(text, open+1)
+	}
+	if from, ok := unitStart(text); ok {
+		return s.unitOffers(text, from)
 	}
 	start := wordStart(text)
 	word, before := text[start:], strings.TrimRight(text[:start], " ")
@@ -92,7 +96,21 @@ func suits(p *program.Param, t program.Type) bool {
 		(p.Plane == "" || t.Plane == "" || t.Plane == p.Plane)
 }
 
-// unitOffers completes a unit in a bracket that opens before start.
+// unitStart is where the unit begins that is being typed behind a number.
+func unitStart(text string) (int, bool) {
+	start := strings.LastIndexAny(text, " ([{,=+<>") + 1
+	number := strings.TrimSuffix(text[:start], " ")
+	if digits := strings.TrimLeft(text[start:], "0123456789._"); digits != text[start:] {
+		start = len(text) - len(digits) // it touches its number
+		number = text[:start]
+	}
+	i := strings.LastIndexFunc(number, func(r rune) bool { return !wordRune(r) && r != '.' }) + 1
+	letters := strings.HasPrefix(text[start:], "/") || start < len(text) && (unicode.IsLetter(rune(text[start])) || text[start] >= utf8.RuneSelf)
+	return start, letters && i < len(number) && unicode.IsDigit(rune(number[i]))
+}
+
+// unitOffers completes a unit that begins at start, in a bracket or behind a
+// number.
 func (s *Session) unitOffers(text string, start int) (int, []string) {
 	inside := text[start:]
 	if i := strings.LastIndex(inside, " at "); i >= 0 {
@@ -110,12 +128,19 @@ func (s *Session) unitOffers(text string, start int) (int, []string) {
 	for _, w := range s.sys.Words() {
 		list = append(list, w)
 		for _, p := range []string{"n", "u", "m", "k", "M", "G", "c", "p", "f"} {
-			if _, err := s.sys.Parse(p + w); err == nil && word != "" && strings.HasPrefix(p+w, word) {
+			if u, err := s.sys.Parse(p + w); err == nil && commonly(p, w, u) && word != "" && strings.HasPrefix(p+w, word) {
 				list = append(list, p+w)
 			}
 		}
 	}
 	return at, beginning(word, list)
+}
+
+// commonly says whether a prefix is worth offering: centi before metres, and
+// none that makes counted things smaller.
+func commonly(prefix, word string, u units.Unit) bool {
+	counted := u.Dimension().WithoutCounted() != u.Dimension() || u.Dimension().IsNumber()
+	return (prefix != "c" || word == "m") && (!counted || prefix == "k" || prefix == "M" || prefix == "G")
 }
 
 func planeNames(list []program.Plane) []string {

@@ -33,6 +33,10 @@ func (s *Session) showOther(a *syntax.Show, c *program.Checker) ([]Result, error
 	case program.ChainKind:
 		return nil, syntax.Fail(a.X.Span(), n.Chain().Name+" is a chain, not a value", "walk "+n.Chain().Name+" 250 W at IF, or transmission("+n.Chain().Name+", IF, WAFER)")
 	}
+	if n.Type.Kind == program.BodyKind {
+		what := c.Said(a.X)
+		return nil, syntax.Fail(a.X.Span(), what+" is a body, not a value", "reflectivity("+what+", 13.5 nm) or transmittance("+what+") ask it; see: help reflectivity")
+	}
 	return nil, syntax.Fail(a.X.Span(), "this has no value to print", "see: help language")
 }
 

@@ -48,7 +48,9 @@ func (s *Session) explainConstant(name string) *Explanation {
 func (s *Session) undefined(name string, at syntax.Span) *syntax.Error {
 	e := syntax.Fail(at, name+" is not defined", "names lists what is")
 	e.Cause = ErrUnknown
-	if near := s.near(name); len(near) > 0 {
+	if s.rows[name] != nil {
+		e.Msg, e.Hint = name+" is a function of the tool and rests on nothing", "see: help "+name
+	} else if near := s.near(name); len(near) > 0 {
 		e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
 	}
 	return e

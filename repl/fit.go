@@ -3,6 +3,7 @@ package repl
 import (
 	"errors"
 	"fmt"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -86,6 +87,9 @@ func (s *Session) fit(j job) ([]Result, error) {
 	if err != nil {
 		return nil, err
 	}
+	if err := w.takes(columns); err != nil {
+		return nil, err
+	}
 	if err := w.solve(f); err != nil {
 		return nil, err
 	}
@@ -149,6 +153,37 @@ func (w *fitting) columns(columns []string) {
 			w.names, w.start = append(w.names, name), append(w.start, 0)
 		}
 	}
+}
+
+// takes refuses an equation without a column of the table, and warns of a column
+// that a name of the session hides.
+func (w *fitting) takes(columns []string) error {
+	data, found := w.a.Data.Name, false
+	for _, x := range []syntax.Expr{w.a.X, w.a.Y} {
+		syntax.Each(x, func(x syntax.Expr) {
+			n, ok := x.(*syntax.Name)
+			if !ok {
+				return
+			}
+			column, long := strings.CutPrefix(n.Name, data+".")
+			hidden := !long && w.session.store.defs[n.Name] != nil
+			switch {
+			case !slices.Contains(columns, column):
+			case !hidden:
+				found = true
+			case !slices.Contains(w.names[:len(w.a.Names)], n.Name):
+				note := n.Name + " is the name of the session here; the column is " + data + "." + n.Name
+				if !slices.Contains(w.c.Warnings, note) {
+					w.c.Warnings = append(w.c.Warnings, note)
+				}
+			}
+		})
+	}
+	if !found {
+		at := w.a.X.Span().Join(w.a.Y.Span())
+		return syntax.Fail(at, "no column of "+data+" stands in this equation", "its columns are "+data+"."+strings.Join(columns, ", "+data+"."))
+	}
+	return nil
 }
 
 func (w *fitting) solve(f *formulas) error {

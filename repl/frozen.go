@@ -7,8 +7,8 @@ import (
 )
 
 // Frozen is a session as it stood when it was frozen. It never changes and is
-// safe for concurrent use, as long as the functions of the host are. Every error
-// is a *Refusal.
+// safe for concurrent use, as long as the functions in its Config are. Every
+// error is a *Refusal.
 type Frozen struct{ session *Session }
 
 // Freeze computes what every name is worth and returns the session as it stands
@@ -53,6 +53,21 @@ func (z *Frozen) Sweep(ctx context.Context, text string) (*SweepTable, error) {
 // Solve is Session.Solve.
 func (z *Frozen) Solve(ctx context.Context, text string) (*Found, error) {
 	return z.session.Solve(ctx, text)
+}
+
+// Maximise is Session.Maximise.
+func (z *Frozen) Maximise(ctx context.Context, text string) (*Found, error) {
+	return z.session.Maximise(ctx, text)
+}
+
+// Minimise is Session.Minimise.
+func (z *Frozen) Minimise(ctx context.Context, text string) (*Found, error) {
+	return z.session.Minimise(ctx, text)
+}
+
+// Compare is Session.Compare.
+func (z *Frozen) Compare(ctx context.Context, text string) (*Table, error) {
+	return z.session.Compare(ctx, text)
 }
 
 // Budget is Session.Budget.

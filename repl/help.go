@@ -3,6 +3,8 @@ package repl
 import (
 	"slices"
 	"strings"
+	"unicode"
+	"unicode/utf8"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
@@ -55,19 +57,26 @@ func (s *Session) helpOn(word string) []string {
 		return []string{word + " = " + k.text(s) + ", " + k.doc}
 	}
 	if d := s.store.defs[word]; d != nil {
-		return []string{s.formula(d) + "  " + remarks(d), "why " + word + " shows what it rests on"}
+		return []string{strings.TrimSpace(s.formula(d) + "  " + remarks(d)), "why " + word + " shows what it rests on"}
+	}
+	if slices.Contains(planeNames(scope{s}.Planes()), word) {
+		return append([]string{word + " is a plane."}, topic{text: planesPage}.lines()...)
 	}
 	if u, err := s.sys.Parse(word); err == nil {
-		return []string{s.unitHelp(word, u)}
+		lines := []string{s.unitHelp(word, u)}
+		if found := s.mentions(word); len(found) > 0 && u.Dimension().IsNumber() {
+			lines = append(append(lines, "what mentions "+word+":"), found...)
+		}
+		return lines
 	}
 	return nil
 }
 
 func overview() []string {
 	return append([]string{
-		"A line is an expression, a definition or a statement; help WORD explains any of them.",
-		"  30 mJ/cm^2 * 8.58 cm^2              an expression; a unit stands right behind its number",
-		"  P = 250 W at IF  # a note           a definition, live; IF is the plane it stands at",
+		"A line is an expression, a definition or a statement; help WORD explains them.",
+		"  30 mJ/cm^2 * 8.58 cm^2              a unit stands right behind its number",
+		"  P = 250 W at IF  # a note           a definition, live; IF is its plane",
 		"  photon_count(30 mJ/cm^2, 400 nm^2)  a named function",
 		"  P / 3 [W]                           a bracket states the answer in that unit",
 		""}, topicList()...)
@@ -193,11 +202,21 @@ func (s *Session) resultKind(f *program.Function) string {
 	return text
 }
 
-// mentions lists what mentions a word, a line each.
+// mentions lists what mentions a word, or one that begins with it, a line each.
 func (s *Session) mentions(word string) []string {
 	word = strings.ToLower(word)
 	var rows [][]string
-	has := func(texts ...string) bool { return strings.Contains(strings.ToLower(strings.Join(texts, " ")), word) }
+	has := func(texts ...string) bool {
+		before := ' '
+		text := strings.ToLower(strings.Join(texts, " "))
+		for i, r := range text {
+			if !(unicode.IsLetter(before) || unicode.IsDigit(before)) && strings.HasPrefix(text[i:], word) && (len(word) > 2 || !startsWord(text[i+len(word):])) {
+				return true
+			}
+			before = r
+		}
+		return false
+	}
 	for _, f := range s.functionsByName() {
 		if has(f.Name, f.Summary, f.Section) {
 			rows = append(rows, []string{"  help " + f.Name, f.Summary})
@@ -219,6 +238,12 @@ func (s *Session) mentions(word string) []string {
 		}
 	}
 	return aligned(rows)
+}
+
+// startsWord says whether a text goes on with a letter or a digit.
+func startsWord(text string) bool {
+	r, _ := utf8.DecodeRuneInString(text)
+	return unicode.IsLetter(r) || unicode.IsDigit(r)
 }
 
 func (t topic) lines() []string { return strings.Split(strings.Trim(t.text, "\n"), "\n") }

@@ -108,7 +108,21 @@ func (s *Session) bringIn(ctx context.Context, file string, trail []string) erro
 }
 
 // bringPart runs one statement of an imported file when it defines something.
+// What was refused when it was said, and is again, defines nothing.
 func (s *Session) bringPart(ctx context.Context, file string, p whole, trail []string) (string, error) {
+	if !p.refused {
+		return s.bringDefinition(ctx, file, p, trail)
+	}
+	before := s.snapshot()
+	name, err := s.bringDefinition(ctx, file, p, trail)
+	if err != nil && ctx.Err() == nil {
+		s.restore(before)
+		return "", nil
+	}
+	return name, err
+}
+
+func (s *Session) bringDefinition(ctx context.Context, file string, p whole, trail []string) (string, error) {
 	st, bad := syntax.Parse(p.text)
 	if bad != nil {
 		return "", fmt.Errorf("%s:%d: %w", file, p.number, bad)

@@ -35,9 +35,8 @@ func (in Input) At(plane string) Input {
 // open makes the inputs known to a checker and lists their names. The inputs
 // come back with the planes and kinds that the session's names have.
 func (s *Session) open(c *program.Checker, inputs []Input) ([]Input, []string, error) {
-	var known []Input
-	var names []string
-	fresh := map[string]program.Type{}
+	known, names := make([]Input, 0, len(inputs)), make([]string, 0, len(inputs))
+	fresh := make(map[string]program.Type, len(inputs))
 	for _, in := range inputs {
 		if slices.Contains(names, in.Name) {
 			return nil, nil, syntax.Fail(syntax.Span{}, "the input "+in.Name+" stands twice", "give each input once")

@@ -61,8 +61,6 @@ func sides(args []program.Type) (program.Type, error) {
 	return args[0], err
 }
 
-func bareNumber([]program.Type) (program.Type, error) { return program.Type{}, nil }
-
 // domain turns what a function has no value for into an error.
 func domain(name string, f func(float64) float64) func([]float64) (float64, []string, error) {
 	return func(x []float64) (float64, []string, error) {

@@ -91,7 +91,11 @@ func aligned(rows [][]string) []string {
 
 func (s *Session) forget(j job) ([]Result, error) {
 	c := j.do.(*syntax.Command)
-	for _, n := range c.Names {
+	for i, n := range c.Names {
+		if key := program.MaterialKey(n.Name); s.store.defs[n.Name] == nil && s.store.defs[key] != nil {
+			c.Names[i].Name = key
+			continue
+		}
 		if s.store.defs[n.Name] == nil {
 			return nil, syntax.Fail(n.Where, n.Name+" is not defined", "names lists what is")
 		}

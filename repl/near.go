@@ -3,6 +3,8 @@ package repl
 import (
 	"slices"
 	"strings"
+
+	"example.com/dosewright/repl/internal/syntax"
 )
 
 // near returns at most two known words that are spelled like this one.
@@ -38,6 +40,26 @@ func (s *Session) near(word string) []string {
 		words = append(words, g.word)
 	}
 	return words
+}
+
+// misspelt refuses a line that could not be read for its first word, where that
+// is a statement's in another spelling, or a function without parentheses.
+func (s *Session) misspelt(text string, bad *syntax.Error) *syntax.Error {
+	word, _, more := strings.Cut(text, " ")
+	if !more || len(bad.Marks) == 0 || bad.Marks[0].Start > len(word)+1 || syntax.StatementWord(word) || s.store.defs[word] != nil {
+		return bad
+	}
+	at := syntax.Span{End: len(word)}
+	if s.rows[word] != nil {
+		return syntax.Fail(at, word+" is a function; it takes its arguments in parentheses", "see: help "+word)
+	}
+	for _, st := range statements() {
+		limit := 1 + len(word)/5
+		if len(word) > 2 && syntax.StatementWord(st.word) && spelling(strings.ToLower(word), st.word, limit) <= limit {
+			return syntax.Fail(at, word+" begins no statement", "did you mean "+st.word+"?")
+		}
+	}
+	return bad
 }
 
 // spelling counts insertions, deletions, replacements and swaps of neighbours

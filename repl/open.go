@@ -4,7 +4,6 @@ import (
 	"errors"
 	"fmt"
 	"maps"
-	"strings"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
@@ -105,14 +104,10 @@ func (s *Session) hostName(what, name string) error {
 	return fmt.Errorf("the %s %s of the host cannot have this name, which is %s already: %w", what, name, meaning, ErrName)
 }
 
-const letters = "abcdefghijklmnopqrstuvwxyzABCDEFGHIJKLMNOPQRSTUVWXYZ_"
-
 // isName says whether the language reads a text as one name.
 func isName(text string) bool {
-	head := strings.TrimRight(text, "0123456789")
-	plain := strings.Trim(head, letters) == "" && head != "" && len(text) <= syntax.MaxName
-	if plain || syntax.Reserved(text) {
-		return true // most are
+	if plainName(text) || syntax.Reserved(text) {
+		return true
 	}
 	st, bad := syntax.Parse(text)
 	if bad != nil {
@@ -124,4 +119,16 @@ func isName(text string) bool {
 	}
 	n, ok := show.X.(*syntax.Name)
 	return ok && n.Name == text
+}
+
+// plainName says the same of most names, fast.
+func plainName(text string) bool {
+	for i := range len(text) {
+		c := text[i]
+		letter := c == '_' || 'a' <= c|0x20 && c|0x20 <= 'z'
+		if !letter && (i == 0 || c < '0' || c > '9') {
+			return false
+		}
+	}
+	return text != "" && len(text) <= syntax.MaxName
 }

@@ -23,9 +23,6 @@ type File interface {
 // that a transcript replays on any terminal.
 const sketchColumns = 76
 
-// pictureFormats are the endings of picture files.
-var pictureFormats = []string{"svg", "png"}
-
 // ending says what a file is to hold.
 func ending(name string) string { return strings.ToLower(strings.TrimPrefix(path.Ext(name), ".")) }
 
@@ -35,11 +32,11 @@ func (s *Session) destinations(out syntax.Output, tables bool) error {
 		switch e := ending(to.Text); {
 		case e == "csv" && slices.ContainsFunc(out.To[:i], func(b syntax.String) bool { return ending(b.Text) == "csv" }):
 			return syntax.Fail(to.Where, "one statement writes one table", "leave out one of the .csv files")
-		case s.config.Create == nil:
+		case s.config.Create == nil && !s.silent:
 			return &syntax.Error{Marks: []syntax.Span{to.Where}, Msg: "this session writes no files", Hint: "leave out to, the reply holds the same", Cause: ErrFile}
 		case e == "csv" && tables:
 		case e == "svg" || e == "png":
-			if s.config.Draw == nil {
+			if s.config.Draw == nil && !s.silent {
 				return &syntax.Error{Marks: []syntax.Span{to.Where}, Msg: "this session draws no pictures", Hint: "write a table to a .csv file", Cause: ErrFile}
 			}
 		default:
@@ -64,7 +61,7 @@ func (s *Session) write(to syntax.String, fill func(io.Writer) error) error {
 	}
 	full, err := s.inside(to.Text)
 	if err != nil {
-		return err
+		return &syntax.Error{Marks: []syntax.Span{to.Where}, Msg: err.Error(), Hint: "name a file of the session's folder", Cause: err}
 	}
 	f, err := s.config.Create(full)
 	if err == nil {
@@ -86,7 +83,7 @@ func (s *Session) write(to syntax.String, fill func(io.Writer) error) error {
 func (s *Session) draw(out syntax.Output, p *Picture) ([]string, error) {
 	for _, to := range out.To {
 		e := ending(to.Text)
-		if e != "svg" && e != "png" {
+		if e != "svg" && e != "png" || s.silent && s.config.Draw == nil {
 			continue
 		}
 		if err := s.write(to, func(w io.Writer) error { return s.config.Draw(p, e, w) }); err != nil {

@@ -164,7 +164,7 @@ func TestDistributionReply(t *testing.T) {
 	spoken(t, s, "w [nm] = rectangular(10 nm, 14 nm)")
 	text := printed(spoken(t, s, `propagate 2 * w [nm] : trials = 1e5, seed = 3, plot, to "w.svg"`))
 	lines := strings.Split(text, "\n")
-	if len(lines) != 7 || !strings.HasPrefix(lines[0], "mean ") || !strings.HasPrefix(lines[1], "standard uncertainty  2.30") || !strings.HasPrefix(lines[3], "shortest 95 % interval  20.") ||
+	if len(lines) != 7 || !strings.HasPrefix(lines[0], "mean ") || !strings.HasPrefix(lines[1], "standard uncertainty    2.30") || !strings.HasPrefix(lines[3], "shortest 95 % interval  20.") ||
 		lines[4] != "100000 trials, seed 3; behind ± stands what is not settled yet" || lines[5] != "a chart 76 wide" || lines[6] != "written: w.svg" {
 		t.Errorf("the reply is\n%s", text)
 	}

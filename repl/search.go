@@ -96,7 +96,8 @@ func (h *hunt) solve() ([]Result, error) {
 	}
 	left := h.session.choose(h.f, 0, typical.Left)
 	right := h.session.choose(h.f, 1, typical.Right)
-	out.Columns = []Column{{h.v.name, stated(h.v.unit)}, {h.f.names[0], stated(left)}, {h.f.names[1], stated(right)}}
+	a := h.job.do.(*syntax.Search)
+	out.Columns = []Column{{h.v.name, stated(h.v.unit)}, {side(a.X, h.f.names[0]), stated(left)}, {side(a.Y, h.f.names[1]), stated(right)}}
 	for _, root := range r.List {
 		out.Rows = append(out.Rows, []Cell{number(h.v.unit.From(root.X)), number(left.From(root.Left)), number(right.From(root.Right))})
 		switch {
@@ -119,6 +120,15 @@ func (h *hunt) solve() ([]Result, error) {
 		out.Remarks = append(out.Remarks, fmt.Sprintf("parts of the range have no value: %v", r.Failure))
 	}
 	return []Result{out}, nil
+}
+
+// side is the head of one side of an equation: what is written there, or for a
+// number alone that it is wanted.
+func side(x syntax.Expr, said string) string {
+	if bare(x) {
+		return "wanted"
+	}
+	return said
 }
 
 // noRoot says what the sides are at the ends and where they come nearest.
@@ -144,7 +154,7 @@ func (h *hunt) optimum(which string) ([]Result, error) {
 	unit := h.session.choose(h.f, 0, o.List[0].Y)
 	out := &Found{Table: Table{Columns: []Column{{h.v.name, stated(h.v.unit)}, {h.f.names[0], stated(unit)}, {"where", ""}}, Warnings: h.c.Warnings}}
 	for _, p := range o.List {
-		out.Rows = append(out.Rows, []Cell{number(h.v.unit.From(p.X)), number(unit.From(p.Y)), word(boundaries[p.Boundary])})
+		out.Rows = append(out.Rows, []Cell{number(h.v.unit.From(p.X)), number(unit.From(p.Y)), word(whereabouts(p.Boundary))})
 		if p.To != p.X {
 			out.Remarks = append(out.Remarks, fmt.Sprintf("the same from %s to %s", h.place(p.X), h.place(p.To)))
 		}
@@ -158,7 +168,15 @@ func (h *hunt) optimum(which string) ([]Result, error) {
 	return []Result{out}, nil
 }
 
-var boundaries = map[study.Boundary]string{
-	study.Inside: "inside", study.AtFrom: "at the lower end of the range", study.AtTo: "at the upper end of the range",
-	study.AtNoValues: "where values end",
+// whereabouts says where in the range an optimum lies.
+func whereabouts(b study.Boundary) string {
+	switch b {
+	case study.AtFrom:
+		return "at the lower end of the range"
+	case study.AtTo:
+		return "at the upper end of the range"
+	case study.AtNoValues:
+		return "where values end"
+	}
+	return "inside"
 }

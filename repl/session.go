@@ -162,7 +162,7 @@ func (s *Session) InBlock() bool { return len(s.block) > 0 }
 func (s *Session) run(ctx context.Context, text string) *Reply {
 	var r *Reply
 	if st, bad := syntax.Parse(text); bad != nil {
-		r = s.refusal(text, bad)
+		r = s.refusal(text, s.misspelt(text, bad))
 	} else if st.Do == nil {
 		r = &Reply{Text: text}
 	} else {

@@ -81,8 +81,9 @@ func transcript(name string, text []byte) ([]said, error) {
 
 // whole is a statement of a session file, the lines of a block joined.
 type whole struct {
-	number int // of its first line
-	text   string
+	number  int // of its first line
+	text    string
+	refused bool // its recorded reply is a refusal
 }
 
 // statementsOf joins the lines of blocks. A line of a block that was refused
@@ -98,15 +99,22 @@ func statementsOf(list []said) []whole {
 		switch {
 		case open && syntax.BlockEnd(text):
 			out[len(out)-1].text += "\nend"
+			out[len(out)-1].refused = saysRefused(l.recorded)
 			open = false
 		case open && len(l.recorded) == 0:
 			out[len(out)-1].text += "\n  " + text
 		case !open && text != "" && !strings.HasPrefix(text, "#"):
-			out = append(out, whole{l.number, text})
+			out = append(out, whole{l.number, text, saysRefused(l.recorded)})
 			_, open = syntax.BlockHeading(text)
 		}
 	}
 	return out
+}
+
+// saysRefused says whether a recorded reply is that of a refused statement: its
+// second line marks a place in the first.
+func saysRefused(reply []string) bool {
+	return len(reply) > 2 && strings.Contains(reply[1], "~") && strings.Trim(reply[1], " ~") == ""
 }
 
 // inside joins an import path to the folder of the file that names it and

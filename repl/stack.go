@@ -169,9 +169,18 @@ func (w *stacking) material(name syntax.Name) (*materialBody, int, error) {
 	n := w.c.Material(name.Name)
 	if n == nil {
 		return nil, 0, &syntax.Error{Marks: []syntax.Span{name.Where}, Msg: name.Name + " is no material that is known here",
-			Hint: "element symbols are known; others are named by material " + name.Name + " = SiO2 2.2 g/cm^3", Cause: ErrUnknown}
+			Hint: "element symbols are known; others are named by " + namingMaterial(name.Name), Cause: ErrUnknown}
 	}
 	return n.Body().(*materialBody), w.add(n.Numbers()[0]), nil
+}
+
+// namingMaterial is a statement that would name a material.
+func namingMaterial(name string) string {
+	formula := "SiO2"
+	if _, err := euv.ParseFormula(name); err == nil {
+		formula = name
+	}
+	return "material " + name + " = " + formula + " 2.2 g/cm^3, with its own density"
 }
 
 func (w *stacking) layers(line syntax.BlockLine) error {

@@ -85,7 +85,7 @@ func statements() []statement {
 		{"digits", "digits 5", "sets how many significant digits answers show, 2 to 15", "", "digits 5", (*Session).setDigits},
 		{"help", "help  or  help topic", "explains a function, a statement, a unit or a topic", "", "help units", (*Session).help},
 		{"save", "save \"file\"", "writes what was said, with the replies, whole or not at all", "", "", (*Session).save},
-		{"replay", "replay \"file\"", "runs a saved session apart from this one and compares the replies", "", "", (*Session).replayFile},
+		{"replay", "replay \"file\"", "runs a saved session apart from this one and compares the replies", "The command has options of its own: see help files.", "", (*Session).replayFile},
 		{"quit", "quit", "ends the session", "", "", (*Session).quit},
 	}
 }
@@ -161,7 +161,9 @@ reflectivity(NAME, 13.5 nm, 6 deg), peak_wavelength(NAME), bandwidth(NAME) ask i
 
 const chainHelp = `Lines in the order in which light meets them:
   at IF                          a plane
-  illuminator x4: 66 %           an element, crossed four times; a factor from 0 to 1
+  pellicle: 88 %                 an element (mirror, film, mask); a factor from 0 to 1
+  illuminator x4: 66 %           crossed four times, with one error for all of them
+  m x6 independent: (66 ± 1) %   six of one kind, each with an error of its own
   reduction: 4, 4                across the scan, then along it
   at WAFER
   band: 13.5 nm, 2 %             centre and full width; without it one wavelength

@@ -141,7 +141,7 @@ func (w *sweeping) fits() error {
 	at := w.a.Axes[0].NameAt
 	switch {
 	case n > float64(l.Points):
-		return over(at, "Points", n, l.Points, fmt.Sprintf("this sweep has %.4g points; the most are %d", n, l.Points), "take larger steps")
+		return over(at, "Points", n, l.Points, fmt.Sprintf("this sweep has %s points; the most are %d", units.FormatNumber(n, 4), l.Points), "take larger steps")
 	case picture && n > float64(l.Pictured):
 		return over(at, "Pictured", n, l.Pictured, fmt.Sprintf("this picture would have %.0f points; the most are %d", n, l.Pictured), "take larger steps, or write a table: to \"sweep.csv\"")
 	case table == nil && !picture && n > float64(l.Rows):

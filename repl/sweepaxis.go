@@ -2,7 +2,6 @@ package repl
 
 import (
 	"math"
-	"strings"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/study"
@@ -42,14 +41,17 @@ func (s *Session) stepped(j job, c *program.Checker, slot int, a syntax.Axis, v 
 		return study.Axis{}, syntax.Fail(a.By.Span(), msg, hint)
 	}
 	step, err := s.single(j.ctx, a.By, c)
-	unit := v.unit.Interval().String()
+	way := "write the step in " + v.unit.Interval().String()
+	if v.unit.IsOne() {
+		way = "write the step as a plain number"
+	}
 	switch {
 	case err != nil:
 		return study.Axis{}, err
 	case step.Point:
 		return refuse("a step is a difference, not a temperature point", "write the step in K")
 	case step.Unit.Dimension() != v.unit.Dimension():
-		return refuse("the step is "+s.kindOf(step.Unit.Dimension())+", the range "+s.describe(v.typ), "write the step as "+strings.TrimSpace("a number in "+unit))
+		return refuse("the step is "+s.kindOf(step.Unit.Dimension())+", the range "+s.describe(v.typ), way)
 	case step.SI == 0:
 		return refuse("a step of zero leads nowhere", "write a step, or so many points: 41 points")
 	}

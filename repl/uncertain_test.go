@@ -57,7 +57,7 @@ func TestUncertainLiterals(t *testing.T) {
 		"3.0(1) W * 2":                               "6.00(20) W",
 		"13.50(2)e-9 m":                              "13.500(20) nm",
 		"100 wafer/h ± 5 %":                          "100.0(50) wafer/h",
-		"13.500(20) nm + 1.0(1) nm [pm]":             "1.450(10)e4 pm",
+		"13.500(20) nm + 1.0(1) nm [pm]":             "14500(100) pm",
 		"30.00(60) mJ/cm² at WAFER":                  "30.00(60) mJ/cm² at WAFER",
 		"2 ± 10 % + 1":                               "3.00(20)",
 		"(2 ± 0.2 + 1) * 1 nm":                       "3.00(20) nm",
@@ -79,7 +79,7 @@ func TestUncertainRefusals(t *testing.T) {
 		{"22 degC ± 2 %", "a percentage of a temperature point has no meaning", "write the uncertainty in K: 22 degC ± 0.5 K"},
 		{"30 mJ/cm^2 ± 0.6", "the uncertainty has no unit", "write 30 mJ/cm^2 ± 0.6 mJ/cm^2, or (30 ± 0.6) mJ/cm^2"},
 		{"30 mJ/cm^2 ± 0.6 nm", "the uncertainty is length (m), the value fluence (mJ/cm²)", "write it in mJ/cm^2, or as a percentage of the value"},
-		{"30 ± 0.6 nm", "the uncertainty is length (m), the value a pure number", "write it in , or as a percentage of the value"},
+		{"30 ± 0.6 nm", "the uncertainty is length (m), the value a pure number", "write it as a plain number, or as a percentage of the value"},
 		{"30.0(6) nm ± 2 %", "the uncertainty stands twice", "write 13.50(2) nm or 13.50 nm ± 0.02 nm"},
 		{"30 nm ± 2.0(1) nm", "this uncertainty: this is no decimal number", "choose a unit that brings the number closer to one"},
 		{"30 nm (k=2)", "no uncertainty stands here of which this could be said", "write it behind ±: 30 nm ± 2 % (k=2)"},
@@ -172,6 +172,7 @@ func TestCorrelations(t *testing.T) {
 	spoken(t, s, "correlation b, a = 1")
 	prints(t, s, "a + b", "7.0(20)")
 	prints(t, s, "b - a", "1(0)")
+	prints(t, s, "a - b", "-1(0)")
 	refused(t, s, "correlation a, b = 1.5", "a correlation coefficient is a number from -1 to 1", "write correlation a, b = 0.8")
 	refused(t, s, "correlation a, b = 1 W", "a correlation coefficient is a number from -1 to 1", "write correlation a, b = 0.8")
 	prints(t, s, "b - a", "1(0)")
@@ -271,6 +272,8 @@ expanded: (5.00 ± 0.44) W (k=1.96), 95 % with infinitely many effective degrees
 input  x   u(x)     unit  c  unit of c  |c| u(x) / K  share of u²
 T      22  0.50000  °C    1  1          0.50000       1
 expanded: (2.00 ± 0.98) K (k=1.96), 95 % with infinitely many effective degrees of freedom`)
+	spoken(t, s, "many = 1 ± 0.1 (nu=1e9)", "wide = 1 ± 10")
+	near.Abs(t, "k of very many degrees of freedom", resultOf[*Budget](t, s, "budget many + wide").K, 1.95996, 1e-5) // of a normal distribution, any table
 	if b := resultOf[*Budget](t, s, "budget two"); b.Rows[0].Input != "two: 1.0(1)" || b.Rows[1].Input != "two: 2.0(1)" {
 		t.Errorf("the literals of one name are told apart as %q and %q", b.Rows[0].Input, b.Rows[1].Input)
 	}

@@ -57,16 +57,22 @@ func planeList(planes []program.Plane) string {
 
 func (s *Session) walkFrom(ch *program.Chain, start int, x *Value, c *program.Checker) ([]Result, error) {
 	factors := make([]float64, len(ch.Steps)) // 1 where nothing is taken
+	var doubts []string
 	for i, st := range ch.Steps {
 		factors[i] = 1
 		if st.All == nil {
 			continue
 		}
-		f, _, err := s.compute(c.Factor(ch, i, st.All.At))
+		f, warnings, err := s.compute(c.Factor(ch, i, st.All.At))
 		if err != nil {
 			return nil, s.blame(err, c)
 		}
 		factors[i] = f
+		for _, w := range warnings {
+			if !slices.Contains(doubts, w) {
+				doubts = append(doubts, w)
+			}
+		}
 	}
 	behind := make([]float64, len(ch.Steps)) // what stands behind each step
 	behind[start] = x.SI
@@ -82,6 +88,7 @@ func (s *Session) walkFrom(ch *program.Chain, start int, x *Value, c *program.Ch
 	largest := slices.Max(behind)
 	unit := s.display(largest, program.Type{Dim: x.Unit.Dimension()})
 	t := walkTable(ch, factors, behind, unit, s.quantityName(x))
+	t.Warnings = doubts
 	if !ch.Spectral {
 		return []Result{t}, nil
 	}

@@ -17,6 +17,9 @@ func (s *Session) why(j job) ([]Result, error) {
 	if k, ok := s.constants[name.Name]; ok {
 		return []Result{&Text{content: []string{name.Name + " = " + k.text(s) + "  # " + k.doc}}}, nil
 	}
+	if s.store.defs[name.Name] == nil && s.store.defs[program.MaterialKey(name.Name)] != nil {
+		name.Name = program.MaterialKey(name.Name)
+	}
 	if s.store.defs[name.Name] == nil {
 		return nil, s.undefined(name.Name, name.Where)
 	}

@@ -8,7 +8,7 @@ import (
 
 // FormatUncertain writes a value with its standard uncertainty in the concise
 // form of the SI Brochure, 5.4.5, with two digits of it: 13.500(20),
-// 1.675(12)e-27. An uncertainty of zero is written as (0) behind the value
+// 3020(110), 1.675(12)e-27. An uncertainty of zero is written as (0) behind the value
 // with so many digits.
 func FormatUncertain(v, u float64, digits int) string {
 	u = math.Abs(u)
@@ -23,8 +23,11 @@ func FormatUncertain(v, u float64, digits int) string {
 	case last > -12:
 		top = max(top, 0)
 	}
-	if top >= -4 && top < 6 && last <= 0 {
+	switch {
+	case top >= -4 && top < 6 && last <= 0:
 		return strconv.FormatFloat(v, 'f', -last, 64) + "(" + scaled(u, last) + ")"
+	case top < 6 && last == 1:
+		return rounded(v, last) + "(" + rounded(u, last) + ")"
 	}
 	ten := top
 	if top < last+1 {
@@ -42,11 +45,26 @@ func FormatExpanded(v, u float64) string {
 		return "(" + FormatNumber(v, 5) + " ± 0)"
 	}
 	last := lastDigit(u)
-	if last <= 0 && last > -12 && math.Abs(v) < 1e9 {
+	switch {
+	case last <= 0 && last > -12 && math.Abs(v) < 1e9:
 		return "(" + strconv.FormatFloat(v, 'f', -last, 64) + " ± " + strconv.FormatFloat(u, 'f', -last, 64) + ")"
+	case last == 1 && math.Abs(v) < 1e6:
+		return "(" + rounded(v, last) + " ± " + rounded(u, last) + ")"
 	}
 	digits := min(max(decade(v)-last+1, 2), 17)
-	return "(" + plainExponent(strconv.FormatFloat(v, 'e', digits-1, 64)) + " ± " + plainExponent(strconv.FormatFloat(u, 'e', 1, 64)) + ")"
+	return "(" + exponential(v, digits) + " ± " + exponential(u, 2) + ")"
+}
+
+// rounded writes a number rounded to a power of ten from 10 up.
+func rounded(v float64, ten int) string {
+	return strconv.FormatFloat(math.Round(v/math.Pow10(ten))*math.Pow10(ten), 'f', 0, 64)
+}
+
+// exponential writes 3.02e3 with so many digits.
+func exponential(v float64, digits int) string {
+	mantissa, e, _ := strings.Cut(strconv.FormatFloat(v, 'e', digits-1, 64), "e")
+	ten, _ := strconv.Atoi(e)
+	return mantissa + "e" + strconv.Itoa(ten)
 }
 
 // lastDigit is the power of ten of the second digit of u, as it is rounded.

@@ -5,6 +5,7 @@ import (
 	"context"
 	"os"
 	"path/filepath"
+	"slices"
 	"strings"
 	"testing"
 )
@@ -114,10 +115,14 @@ func listing(t *testing.T, dir string) []string {
 func fabNorth(t *testing.T) []string {
 	t.Helper()
 	files := map[string]string{}
-	for _, name := range examples(t) {
+	tables, err := filepath.Glob("../../examples/fab-north/*.csv")
+	if err != nil {
+		t.Fatal(err)
+	}
+	for _, name := range append(examples(t), tables...) {
 		files[filepath.Base(name)] = read(t, name)
 	}
-	return listing(t, inFolder(t, files))
+	return slices.DeleteFunc(listing(t, inFolder(t, files)), func(name string) bool { return filepath.Ext(name) != ".budget" })
 }
 
 // examples are the session files that come with the project.

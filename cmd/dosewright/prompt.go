@@ -49,20 +49,31 @@ func prompt(ctx context.Context, std stdio) int {
 // showing draws how far a computation is, with the time left, once it has
 // taken a second.
 func showing(p *terminal.Progress) repl.Progress {
-	var last int
-	var start time.Time
+	var now pace
 	return func(_ context.Context, done, total int, unit string) {
-		if start.IsZero() || done < last {
-			start = time.Now()
-		}
-		last = done
-		gone := time.Since(start)
+		gone := now.at(time.Now(), done, total)
 		if gone < time.Second || done <= 0 {
 			return
 		}
 		left := time.Duration(float64(gone) * float64(total-done) / float64(done)).Round(time.Second)
 		p.Show(fmt.Sprintf("%d of %d %s, %s left; Ctrl-C stops", done, total, unit, left))
 	}
+}
+
+// pace knows since when a computation runs, from how far it was last.
+type pace struct {
+	start       time.Time
+	done, total int
+}
+
+// at takes how far the computation is and returns how long it has run. One that
+// is no further than before, or has another total, is the next one.
+func (p *pace) at(now time.Time, done, total int) time.Duration {
+	if p.start.IsZero() || done <= p.done || total != p.total {
+		p.start = now
+	}
+	p.done, p.total = done, total
+	return now.Sub(p.start)
 }
 
 // signalled is the status that shells give to a program that a signal ended.

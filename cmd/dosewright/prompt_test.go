@@ -118,3 +118,19 @@ func TestOutputLost(t *testing.T) {
 		outcome{status, "", problems.String()}.wants(t, 2, "", "no space left")
 	}
 }
+
+// The time left counts from the start of its own computation.
+func TestPace(t *testing.T) {
+	var p pace
+	start := time.Unix(0, 0)
+	for _, c := range []struct{ second, done, total, gone int }{
+		{0, 10, 100, 0}, {3, 60, 100, 3}, {5, 100, 100, 5}, // the first
+		{90, 200, 1000, 0}, {92, 400, 1000, 2}, // longer than the first
+		{95, 200, 1000, 0}, {96, 300, 1000, 1}, // the same, after an interruption
+	} {
+		now := start.Add(time.Duration(c.second) * time.Second)
+		if got := p.at(now, c.done, c.total); got != time.Duration(c.gone)*time.Second {
+			t.Errorf("%d of %d at %d s: %v, want %d s", c.done, c.total, c.second, got, c.gone)
+		}
+	}
+}

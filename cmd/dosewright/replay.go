@@ -13,7 +13,7 @@ import (
 // replay runs session files again and compares their replies.
 func replay(ctx context.Context, args []string, std stdio) int {
 	asJSON, update, stepped, outside := false, false, false, false
-	for len(args) > 0 && strings.HasPrefix(args[0], "--") {
+	for len(args) > 0 && strings.HasPrefix(args[0], "-") {
 		switch args[0] {
 		case "--json":
 			asJSON = true
@@ -30,6 +30,11 @@ func replay(ctx context.Context, args []string, std stdio) int {
 	}
 	if len(args) == 0 {
 		return std.wrong("replay needs a session file: dosewright replay daily.budget")
+	}
+	for _, name := range args {
+		if strings.HasPrefix(name, "--") {
+			return std.wrong("options stand before the files: dosewright replay " + name + " " + args[0])
+		}
 	}
 	status := statusFine
 	for _, name := range args {

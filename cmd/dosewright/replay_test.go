@@ -51,6 +51,8 @@ func TestReplayStatuses(t *testing.T) {
 		"a folder":                      {[]string{"."}, 2, nil, "cannot be read"},
 		"no file named":                 {nil, 2, nil, "replay needs a session file"},
 		"an unknown option":             {[]string{"--quiet", "holds.budget"}, 2, nil, "--quiet is no option of replay"},
+		"an unknown letter":             {[]string{"-h"}, 2, nil, "-h is no option of replay"},
+		"an option behind the file":     {[]string{"holds.budget", "--update"}, 2, nil, "options stand before the files: dosewright replay --update holds.budget"},
 	} {
 		t.Run(name, func(t *testing.T) {
 			o := call(t, "", append([]string{"replay"}, c.args...)...)

@@ -15,6 +15,8 @@ import (
 // some terminal multiplexers, that is one line too many and erases what was
 // printed above. The backspace is left out: cursor up, carriage return and
 // cursor right say it all.
+//
+// Below a search in the history it puts words of its own for the editor's.
 type canvas struct {
 	to    io.Writer
 	below string // drawn once, behind the next drawing of the line
@@ -22,6 +24,9 @@ type canvas struct {
 
 func (c *canvas) Write(p []byte) (int, error) {
 	mended := bytes.ReplaceAll(p, []byte("\b\x1b[A\r"), []byte("\x1b[A\r"))
+	for _, w := range searchWords {
+		mended = bytes.Replace(mended, []byte("\x1b[J"+w[0]), []byte("\x1b[J"+w[1]), 1)
+	}
 	if !bytes.HasPrefix(p, []byte("\x1b[J")) {
 		mended = append(mended, c.below...)
 		c.below = ""
@@ -30,4 +35,13 @@ func (c *canvas) Write(p []byte) (int, error) {
 		return 0, err
 	}
 	return len(p), nil
+}
+
+// searchWords are what the editor says of a search and what stands there
+// instead.
+var searchWords = [...][2]string{
+	{"bck-i-search: ", "said before: "},
+	{"fwd-i-search: ", "said after: "},
+	{"failing bck-i-search: ", "nowhere before: "},
+	{"failing fwd-i-search: ", "nowhere after: "},
 }

@@ -208,7 +208,7 @@ func TestPromptSearches(t *testing.T) {
 	s.types("2+2\r")
 	s.reads("| 4\r\n")
 	s.types("\x121+")
-	s.reads("bck-i-search: 1+")
+	s.reads("said before: 1+")
 	s.types("\x1b[1;5C\r") // a word key takes what was found
 	s.reads("| 2\r\n")
 	s.types("\x1b[A\x1b[A\x1b[A\x1b[B\r")

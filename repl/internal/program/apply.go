@@ -163,7 +163,7 @@ func (c *Checker) bind(inner *Checker, f *OwnFunction, p syntax.Param, x syntax.
 	}
 	if p.Stated.Plane != "" {
 		if want.Plane, err = inner.plane(p.Stated.Plane); err != nil {
-			return syntax.Fail(x.Span(), "in "+f.Name+": "+err.Error(), c.planesHint())
+			return syntax.Fail(x.Span(), "in "+f.Name+": "+err.Error(), c.planesHint(p.Stated.Plane))
 		}
 		if !mayStand(want.Dim) {
 			return syntax.Fail(x.Span(), "in "+f.Name+": "+c.quantity(want.Dim)+" does not stand at a plane", "declare "+p.Name+" ["+p.Stated.Unit+"]")

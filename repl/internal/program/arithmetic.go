@@ -231,7 +231,7 @@ func (c *Checker) at(x *syntax.At) (*Node, error) {
 	}
 	p, err := c.plane(x.Plane)
 	if err != nil {
-		return nil, syntax.Fail(x.PlaneAt, err.Error(), c.planesHint())
+		return nil, syntax.Fail(x.PlaneAt, err.Error(), c.planesHint(x.Plane))
 	}
 	t := a.Type
 	switch {

@@ -34,7 +34,12 @@ func (c *Checker) Quantity(x syntax.Expr, want units.Dimension, what string) (*N
 	if err != nil {
 		return nil, err
 	}
-	if n.Type.Kind != Number || n.Type.Dim != want || n.Type.Plane != "" {
+	if n.Type.Kind == Number && n.Type.Dim == want && n.Type.Plane != "" {
+		e := syntax.Fail(x.Span(), what+" stands at no plane, and this is at "+string(n.Type.Plane), "number_of(x) drops a plane on purpose")
+		e.Cause = ErrPlane
+		return nil, e
+	}
+	if n.Type.Kind != Number || n.Type.Dim != want {
 		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: what + " is " + c.quantity(want) + ", not " + c.describe(n.Type),
 			Hint: "give it in " + c.Scope.Units().UnitText(want), Cause: Differ("take", n.Type, Type{Dim: want})}
 	}

@@ -214,7 +214,7 @@ func (c *Checker) argument(k *Call, i int, x syntax.Expr) error {
 func (c *Checker) planeArgument(k *Call, i int, x syntax.Expr) error {
 	name, ok := x.(*syntax.Name)
 	if !ok || !c.knownPlane(Plane(name.Name)) {
-		return syntax.Fail(x.Span(), c.text(x.Span())+" is no plane that is known here", c.planesHint())
+		return syntax.Fail(x.Span(), c.text(x.Span())+" is no plane that is known here", c.planesHint(c.text(x.Span())))
 	}
 	k.Words[i] = name.Name
 	return nil

@@ -106,6 +106,14 @@ func (c *Checker) step(ch *Chain, line syntax.BlockLine) (Step, error) {
 	return c.elementStep(s, line)
 }
 
+// percent is how a factor that was meant in per cent is written.
+func percent(v float64) string {
+	if v >= 2 && v <= 100 {
+		return units.FormatNumber(v, 5) + " %"
+	}
+	return "65 %"
+}
+
 func (c *Checker) elementStep(s Step, line syntax.BlockLine) (Step, error) {
 	if len(line.Items) != 1 {
 		return s, syntax.Fail(line.Where, s.Label+" has "+named(len(line.Items), "value")+"; an element has one factor", "write "+s.Label+": 65 %")
@@ -119,7 +127,7 @@ func (c *Checker) elementStep(s Step, line syntax.BlockLine) (Step, error) {
 		return s, syntax.Fail(x.Span(), s.Label+" is a factor between 0 and 1, not "+c.describe(t), "write "+s.Label+": 65 %")
 	}
 	if v, ok := s.Factor.Constant(); ok && !(v >= 0 && v <= 1) {
-		return s, syntax.Fail(x.Span(), fmt.Sprintf("%s is %s; a factor lies between 0 and 1", s.Label, units.FormatNumber(v, 5)), "percent is written 65 %")
+		return s, syntax.Fail(x.Span(), fmt.Sprintf("%s is %s; a factor lies between 0 and 1", s.Label, units.FormatNumber(v, 5)), "percent is written "+percent(v))
 	}
 	s.Runs = s.Factor.runs()
 	if line.Times != nil {

@@ -74,6 +74,11 @@ chain c
 end ! 120 %: mirror is 1.2000; a factor lies between 0 and 1; percent is written 65 %
 chain c
   at IF
+  mirror: 66
+  at WAFER
+end ! 66: mirror is 66; a factor lies between 0 and 1; percent is written 66 %
+chain c
+  at IF
   mirror: -0.1
   at WAFER
 end ! -0.1: mirror is -0.10000; a factor lies between 0 and 1; percent is written 65 %

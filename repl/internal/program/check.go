@@ -213,14 +213,19 @@ func (c *Checker) unknown(x *syntax.Name) error {
 	e.Cause = ErrUnknown
 	if c.Scope.Function(name) != nil || c.Scope.Own(name) != nil {
 		e.Msg, e.Hint = name+" is a function; it takes its arguments in parentheses", "see: help "+name
-	} else if near := c.Scope.Near(name); len(near) > 0 {
-		e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
-	} else if n, _ := c.Scope.Material(name); n != nil {
-		e.Msg, e.Hint = name+" is a material, not a value", "reflectivity("+name+", 13.5 nm) and attenuation("+name+") ask it"
-	} else if _, err := c.Scope.Units().Parse(name); err == nil {
-		e.Msg, e.Hint = name+" is a unit, and a unit stands right behind a number", "write 1 "+name
 	} else if c.knownPlane(Plane(name)) {
 		e.Msg, e.Hint = name+" is a plane, no value", "a plane stands behind at, as in 250 W at "+name
+	} else if _, err := c.Scope.Units().Parse(name); err == nil {
+		e.Msg, e.Hint = name+" is a unit, and a unit stands right behind a number", "write 1 "+name
+		if near := c.Scope.Near(name); len(near) > 0 {
+			e.Hint += ", or did you mean " + strings.Join(near, " or ") + "?"
+		}
+	} else if n, _ := c.Scope.Material(name); n != nil {
+		e.Msg, e.Hint = name+" is a material, not a value", "reflectivity("+name+", 13.5 nm) and attenuation("+name+") ask it"
+	} else if near := c.Scope.Near(name); len(near) > 0 {
+		e.Hint = "did you mean " + strings.Join(near, " or ") + "?"
+	} else if name == "exit" || name == "bye" {
+		e.Hint = "quit leaves"
 	}
 	return e
 }

@@ -47,7 +47,7 @@ func Compile(root *Node, resolve Resolve, inputs ...string) (*Program, error) {
 // CompileAll makes one program of several formulas, which share what they have
 // in common.
 func CompileAll(roots []*Node, resolve Resolve, open Opening) (*Program, error) {
-	c := &compiler{resolve: resolve, open: open, info: map[*Node]*nodeInfo{}, names: map[string]*Node{}}
+	c := &compiler{resolve: resolve, open: open, info: make(map[*Node]*nodeInfo, few), names: make(map[string]*Node, few)}
 	for i, name := range open.Inputs {
 		n := &Node{op: opInput, name: name}
 		c.names[name] = n
@@ -75,12 +75,26 @@ type nodeInfo struct {
 	parents int
 	always  bool // computed in every run
 	place   int  // −1 before it has one
-	lazy    int
 	emitted bool
 	out     operand
 }
 
+// few is how many nodes most formulas have, at the least.
+const few = 16
+
+// fresh makes the record of a node, many at a time.
+func (c *compiler) fresh() *nodeInfo {
+	if len(c.spare) == 0 {
+		c.spare = make([]nodeInfo, few/2)
+	}
+	i := &c.spare[0]
+	c.spare = c.spare[1:]
+	i.place = -1
+	return i
+}
+
 type compiler struct {
+	spare   []nodeInfo
 	resolve Resolve
 	open    Opening
 	sources []*Node
@@ -121,7 +135,7 @@ func (c *compiler) count(n *Node, branch bool) error {
 		if c.nodes++; c.nodes > MaxNodes {
 			return &RunError{Node: n, Err: fmt.Errorf("this formula has more than %d parts: %w", MaxNodes, ErrSize)}
 		}
-		i = &nodeInfo{place: -1}
+		i = c.fresh()
 		c.info[n] = i
 		if n.op == opSource && c.open.Sources {
 			c.sources = append(c.sources, n)

@@ -16,7 +16,7 @@ func (c *Checker) literal(x *syntax.Literal) (*Node, error) {
 		return nil, c.nameBehind(x, err)
 	}
 	c.nameShadowed(x)
-	if strings.Trim(x.Unit, "%ppmb°deg^²³⁻0123456789-") == "" && strings.ContainsAny(x.Unit, "^²³⁻23") && unit.Dimension().IsNumber() {
+	if strings.Trim(x.Unit, "%pmb°deg^²³⁻0123456789-") == "" && strings.ContainsAny(x.Unit, "^²³⁻23") && unit.Dimension().IsNumber() {
 		symbol := strings.TrimRight(x.Unit, "^²³⁻¹0123456789-")
 		return nil, syntax.Fail(x.Where, "the power belongs to the unit here: "+c.text(x.Where)+" is "+x.Number+" times "+symbol+" raised", "write ("+x.Number+" "+symbol+") and the power behind the parenthesis")
 	}
@@ -141,7 +141,7 @@ func (c *Checker) StatedUnit(s *syntax.Stated, n *Node, x syntax.Expr) (units.Un
 	}
 	p, err := c.plane(s.Plane)
 	if err != nil {
-		return u, syntax.Fail(s.Where, err.Error(), c.planesHint())
+		return u, syntax.Fail(s.Where, err.Error(), c.planesHint(s.Plane))
 	}
 	if p != t.Plane {
 		msg := "the answer stands at " + string(t.Plane) + ", not at " + string(p)

@@ -36,6 +36,9 @@ func (p Plane) times(q Plane, sign int) Plane {
 
 // power returns p to the power num/den, with the errors that dimensions have.
 func (p Plane) power(num, den int) (Plane, error) {
+	if p == "" {
+		return "", nil
+	}
 	e := p.exponents()
 	for name, n := range e {
 		if n*num%den != 0 {
@@ -162,9 +165,13 @@ func (c *Checker) knownPlane(p Plane) bool {
 	return KnownPlane(string(p)) || slices.Contains(c.Scope.Planes(), p)
 }
 
-func (c *Checker) planesHint() string {
+// planesHint is the way on from a text that names no known plane.
+func (c *Checker) planesHint(text string) string {
 	var names []string
 	for _, p := range append(slices.Clone(knownPlanes[:]), c.Scope.Planes()...) {
+		if strings.EqualFold(string(p), text) {
+			return "did you mean " + string(p) + "? Upper and lower case differ"
+		}
 		if !slices.Contains(names, string(p)) {
 			names = append(names, string(p))
 		}

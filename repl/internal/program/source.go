@@ -119,7 +119,11 @@ func (c *Checker) spreadWithUnit(x *syntax.Literal, unit units.Unit, v float64) 
 	case ratioUnit(own):
 		return u * math.Abs(v), nil
 	case own.Dimension() != unit.Dimension():
-		e := syntax.Fail(at.Where, "the uncertainty is "+c.quantity(own.Dimension())+", the value "+c.quantity(unit.Dimension()), "write it in "+x.Unit+", or as a percentage of the value")
+		way := "write it in " + x.Unit
+		if x.Unit == "" {
+			way = "write it as a plain number"
+		}
+		e := syntax.Fail(at.Where, "the uncertainty is "+c.quantity(own.Dimension())+", the value "+c.quantity(unit.Dimension()), way+", or as a percentage of the value")
 		e.Cause = &units.DimensionError{Op: "compare", Have: own.Dimension(), Rhs: unit.Dimension()}
 		return 0, e
 	}

@@ -125,10 +125,15 @@ func (c *compiler) nestedPlaces(sub *Program) []int {
 
 // nestedBlock runs an inner program; it belongs to one frame.
 type nestedBlock struct {
-	run   func(in, out [][]float64) (int, error)
-	place []int
-	in    [][]float64
-	out   [][]float64
+	program *Program
+	run     func(in, out [][]float64) (int, error)
+	asked   bool // for its doubts
+	place   []int
+	in      [][]float64
+	out     [][]float64
+
+	low, high float64   // the band at hand
+	within    []float64 // kinks inside it
 }
 
 func (f *Frame) block(index int, sub *Program, place []int) *nestedBlock {
@@ -136,7 +141,7 @@ func (f *Frame) block(index int, sub *Program, place []int) *nestedBlock {
 		f.nested = append(f.nested, nil)
 	}
 	if f.nested[index] == nil {
-		b := &nestedBlock{run: sub.Block(), place: place}
+		b := &nestedBlock{program: sub, run: sub.Block(), place: place}
 		for range len(place) + 1 {
 			b.in = append(b.in, make([]float64, Lanes))
 		}
@@ -159,25 +164,42 @@ func (b *nestedBlock) answer(f *Frame, sp *spectral, center, width float64) (flo
 	if !(center > 0) || !(width >= 0) || width >= 2*center {
 		return 0, fmt.Errorf("the band has its centre at %s and the width %s; a width is 0 or greater and less than twice the centre", units.New(center, units.DimensionOf[units.Length]()), units.New(width, units.DimensionOf[units.Length]()))
 	}
+	b.doubts(f, center)
 	switch {
 	case sp.read != nil:
-		return sp.read(b.spectrum(sp, true), center)
+		return sp.read(b.spectrum(sp), center)
 	case width == 0:
 		return b.single(center)
 	}
 	return b.mean(f, sp, center, width)
 }
 
+// doubts passes on the warnings of the inner program, which blocks of lanes do
+// not gather: those of a single run at the centre, the first time.
+func (b *nestedBlock) doubts(f *Frame, center float64) {
+	if b.asked {
+		return
+	}
+	b.asked = true
+	frame, in := b.program.NewFrame(), []float64{center}
+	for _, at := range b.place {
+		in = append(in, f.v[at])
+	}
+	if b.program.RunAll(frame, in, make([]float64, b.program.Outputs())) == nil {
+		f.warn(frame.Warnings)
+	}
+}
+
 // mean is the mean of the product over the band, weighted by the source.
 func (b *nestedBlock) mean(f *Frame, sp *spectral, center, width float64) (float64, error) {
-	kinks := sp.kinks(center-width/2, center+width/2)
-	mean, off, err := sp.integrate(b.spectrum(sp, true), center, width, kinks)
+	kinks := b.kinks(sp, center-width/2, center+width/2)
+	mean, off, err := sp.integrate(b.spectrum(sp), center, width, kinks)
 	if err != nil {
 		return 0, err
 	}
 	weight := 1.0
 	if sp.weight != nil {
-		if weight, _, err = sp.integrate(b.spectrum(sp, false), center, width, kinks); err != nil {
+		if weight, _, err = sp.integrate(b.source, center, width, kinks); err != nil {
 			return 0, err
 		}
 		if !(weight > 0) {
@@ -197,19 +219,35 @@ func (b *nestedBlock) single(wavelength float64) (float64, error) {
 	return y[0], err
 }
 
-// spectrum is the product times the weight, or the weight alone.
-func (b *nestedBlock) spectrum(sp *spectral, product bool) func(dst, wavelengths []float64) error {
+// spectrum is the product, times the weight of the source where there is one.
+func (b *nestedBlock) spectrum(sp *spectral) func(dst, wavelengths []float64) error {
 	return func(dst, wavelengths []float64) error {
 		return b.values(dst, wavelengths, func(out [][]float64, i int) float64 {
-			switch {
-			case !product:
-				return out[1][i]
-			case sp.weight != nil:
+			if sp.weight != nil {
 				return out[0][i] * out[1][i]
 			}
 			return out[0][i]
 		})
 	}
+}
+
+// source is the weight alone, which is nowhere negative.
+func (b *nestedBlock) source(dst, wavelengths []float64) error {
+	err := b.values(dst, wavelengths, func(out [][]float64, i int) float64 { return out[1][i] })
+	for i := 0; i < len(dst) && err == nil; i++ {
+		if dst[i] < 0 {
+			err = fmt.Errorf("the source's spectrum is negative at %s", units.New(wavelengths[i], units.DimensionOf[units.Length]()))
+		}
+	}
+	return err
+}
+
+// kinks remembers those of the last band, since the tables stay as they are.
+func (b *nestedBlock) kinks(sp *spectral, low, high float64) []float64 {
+	if b.low != low || b.high != high {
+		b.low, b.high, b.within = low, high, sp.kinks(low, high)
+	}
+	return b.within
 }
 
 // values runs the inner program at many wavelengths.

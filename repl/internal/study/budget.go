@@ -58,7 +58,7 @@ func FirstOrder(ctx context.Context, f Eval, s *Sources) (*Budget, error) {
 		parts[slot] = c * in.U
 		b.Rows = append(b.Rows, Contribution{Slot: slot, C: c, U: math.Abs(parts[slot]), OneSided: oneSided})
 	}
-	b.combine(s, parts)
+	b.combine(s, parts, aboveNoise*noise)
 	if !finite(b.U * b.U) {
 		return nil, ErrNotFinite
 	}
@@ -66,9 +66,9 @@ func FirstOrder(ctx context.Context, f Eval, s *Sources) (*Budget, error) {
 	return b, err
 }
 
-// combine works out the combined uncertainty, the shares and the degrees of
-// freedom.
-func (b *Budget) combine(s *Sources, parts []float64) {
+// combine works out the combined uncertainty, which is 0 when no more than
+// rounding is left, the shares and the degrees of freedom.
+func (b *Budget) combine(s *Sources, parts []float64, rounding float64) {
 	shared := make([]float64, len(parts))
 	variances := make([]float64, len(s.groups))
 	var square float64
@@ -76,9 +76,10 @@ func (b *Budget) combine(s *Sources, parts []float64) {
 		variances[i] = g.along(parts, shared)
 		square += variances[i]
 	}
-	if b.U = math.Sqrt(square); square == 0 {
+	if square <= rounding*rounding {
 		return
 	}
+	b.U = math.Sqrt(square)
 	var inverse float64 // of the effective degrees of freedom
 	for i, g := range s.groups {
 		if share := variances[i] / square; g.dof > 0 {

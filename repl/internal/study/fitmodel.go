@@ -89,9 +89,7 @@ func (m *model) jacobian(at []float64) (*jacobian, error) {
 		}
 		var sides [4]residuals
 		for k, a := range []float64{1, -1, 0.5, -0.5} {
-			moved := append([]float64(nil), at...)
-			moved[i] += a * h
-			if sides[k], err = m.residuals(moved); err != nil {
+			if sides[k], err = m.residuals(plusAt(at, i, a*h)); err != nil {
 				return nil, err
 			}
 		}
@@ -105,24 +103,25 @@ func (m *model) jacobian(at []float64) (*jacobian, error) {
 }
 
 // stepOf is the step for a parameter: relative to the largest value it has had,
-// or, when that is 0, one that moves the sides by a small part.
+// or, when that is 0 but for rounding, one that moves the sides by a small part.
 func (m *model) stepOf(i int, at []float64) (float64, error) {
 	m.scale[i] = math.Max(m.scale[i], math.Abs(at[i]))
-	if m.scale[i] > 0 {
-		return relativeStep * m.scale[i], nil
-	}
 	if m.unit[i] > 0 {
-		return m.unit[i], nil
+		return math.Max(m.unit[i], relativeStep*m.scale[i]), nil
 	}
 	here, err := m.residuals(at)
 	if err != nil {
 		return 0, err
 	}
-	moved := append([]float64(nil), at...)
+	if h := relativeStep * m.scale[i]; h > 0 {
+		there, err := m.residuals(plusAt(at, i, h))
+		if err != nil || apart(here.values, there.values) > 1e-11*there.size {
+			return h, nil
+		}
+	}
 	h := 1.0
 	for range stepTries {
-		moved[i] = at[i] + h
-		there, err := m.residuals(moved)
+		there, err := m.residuals(plusAt(at, i, h))
 		switch change := apart(here.values, there.values); {
 		case err != nil || change > 1e-3*there.size:
 			h /= 16
@@ -134,6 +133,12 @@ func (m *model) stepOf(i int, at []float64) (float64, error) {
 		}
 	}
 	return 0, refuse(ErrUndetermined, "parameter %d moves neither side in any row: start elsewhere, or leave it out", i)
+}
+
+func plusAt(at []float64, i int, h float64) []float64 {
+	moved := append([]float64(nil), at...)
+	moved[i] += h
+	return moved
 }
 
 func apart(a, b []float64) float64 {

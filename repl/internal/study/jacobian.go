@@ -87,7 +87,9 @@ func (j *jacobian) result(at []float64, r residuals, steps int) (*Fit, error) {
 	if fit.DoF == 0 {
 		return fit, nil
 	}
-	fit.Residual = math.Sqrt(r.square / float64(fit.DoF))
+	if r.square > square(exactFit*r.size) {
+		fit.Residual = math.Sqrt(r.square / float64(fit.DoF))
+	}
 	fit.U, fit.Correlation = make([]float64, n), grid(n, n)
 	cov := grid(n, n) // (JᵀJ)⁻¹ of the scaled columns
 	for a := range n {

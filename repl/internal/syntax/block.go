@@ -60,6 +60,9 @@ func ParseHeading(line string) (*Block, *Error) {
 	name := p.tok
 	b.Name, b.NameAt = p.name("the name of a " + b.Kind)
 	p.declares(name)
+	if p.err == nil && p.tok.Kind == Word {
+		p.unexpected("the heading is " + b.Kind + " " + b.Name + " alone; each line of the block stands below it")
+	}
 	p.finish()
 	if p.err != nil {
 		return nil, p.err

@@ -29,8 +29,13 @@ func (s *scanner) number() (Token, *Error) {
 			end++
 		}
 		rest := s.src[s.pos+1 : end]
-		return Token{}, Fail(Span{start, end}, s.src[start:end]+" may be a decimal comma or a group of digits",
-			"write "+b.String()+"."+rest+" for the decimal, "+b.String()+rest+" for the group; a list has a blank behind its comma")
+		hint := "write " + b.String() + "." + rest + " for the decimal, " + b.String() + rest + " for the group; a list has a blank behind its comma"
+		if whole, part, pointed := strings.Cut(b.String(), "."); pointed {
+			hint = "write " + whole + part + "." + rest
+		} else if len(rest) != 3 {
+			hint = "write " + b.String() + "." + rest + " for the decimal; a list has a blank behind its comma"
+		}
+		return Token{}, Fail(Span{start, end}, s.src[start:end]+" may be a decimal comma or a group of digits", hint)
 	}
 	return Token{Number, b.String(), at}, nil
 }

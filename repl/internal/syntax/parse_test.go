@@ -260,7 +260,8 @@ chain ! : the end of the line is not expected here; chain begins a block: chain 
 chain 5\nend ! 5: 5 is not expected here; the name of a chain is wanted
 chain at\nend ! at: at is a word of the language and cannot be the name of a chain; choose another name, such as at_1
 chain a.b\nend ! a.b: a.b has a point, and a name has none; choose another name, such as a_b
-chain c d\nend ! c d: two values stand side by side; a product is written with *, and a unit stands right behind its number
+chain c d\nend ! d: d is not expected here; the heading is chain c alone; each line of the block stands below it
+chain c at IF\nend ! at: at is not expected here; the heading is chain c alone; each line of the block stands below it
 chain c\n at IF ! chain c: the block that begins here has no end; its last line is the word end
 chain c ! chain c: the block that begins here has no end; its last line is the word end
 chain c\nend\n5 m ! 5 m: this stands behind the end of the block; give it as a statement of its own
@@ -278,9 +279,11 @@ chain = 5 ! chain: chain is a word of the language and cannot be a name; choose 
 
 func TestRefusals(t *testing.T) {
 	reads(t, `
-1,5 ! 1,5: 1,5 may be a decimal comma or a group of digits; write 1.5 for the decimal, 15 for the group; a list has a blank behind its comma
+1,5 ! 1,5: 1,5 may be a decimal comma or a group of digits; write 1.5 for the decimal; a list has a blank behind its comma
+1.000,5 ! 1.000,5: 1.000,5 may be a decimal comma or a group of digits; write 1000.5
+13.5 nm in eV ! in: in is not expected here; a bracket states the unit of an answer: photon_energy(13.5 nm) [J]
 x = 43,279 ! 43,279: 43,279 may be a decimal comma or a group of digits; write 43.279 for the decimal, 43279 for the group; a list has a blank behind its comma
-(1) + 1,5 m ! 1,5: 1,5 may be a decimal comma or a group of digits; write 1.5 for the decimal, 15 for the group; a list has a blank behind its comma
+(1) + 1,5 m ! 1,5: 1,5 may be a decimal comma or a group of digits; write 1.5 for the decimal; a list has a blank behind its comma
 5. ! 5.: a number has digits on both sides of its point; write 5 or 5.0
 .5 ! .: a number has digits on both sides of its point; write 0.5 for .5 and 5 for 5.
 5.m ! .: a number has digits on both sides of its point; write 0.5 for .5 and 5 for 5.

@@ -130,6 +130,8 @@ func (p *parser) finish() {
 		p.fail(Fail(p.tok.Span, ": is not expected here", "a line of the form label: value stands in a block, such as chain NAME … end"))
 	case p.tok.Kind == Op && text != "(":
 		p.unexpected("a value is wanted between two signs")
+	case p.tok.Kind == Word && (p.tok.Text == "in" || p.tok.Text == "to"):
+		p.unexpected("a bracket states the unit of an answer: photon_energy(13.5 nm) [J]")
 	case p.tok.Kind == Word && inGrammar(p.tok.Text):
 		p.unexpected(p.tok.Text + " is a word of some statements; see: help statements")
 	default:
