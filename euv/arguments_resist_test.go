@@ -21,6 +21,7 @@ type tried struct {
 
 // plain and doubted bring results to one form.
 func plain[R units.Kind](r R, err error) (float64, error) { return float64(r), err }
+
 func doubted[R units.Kind](w Warned[R], err error) (float64, error) {
 	return float64(w.Value), err
 }
@@ -47,18 +48,24 @@ var refusals = []struct {
 	{"AbsorbedEnergyDensity", func(a []float64) (float64, error) {
 		return plain(AbsorbedEnergyDensity(units.Fluence(a[0]), units.AttenuationCoefficient(a[1])))
 	}, []tried{{"dose", 300, below0}, {"attenuation", 5e6, below0}}},
-	{"ShotNoise", func(a []float64) (float64, error) { return plain(ShotNoise(count(a[0]))) },
-		[]tried{{"count", 20, upTo0}}},
+	{
+		"ShotNoise", func(a []float64) (float64, error) { return plain(ShotNoise(count(a[0]))) },
+		[]tried{{"count", 20, upTo0}},
+	},
 	{"YieldNoise", func(a []float64) (float64, error) {
 		return plain(YieldNoise(count(a[0]), count(a[1]), count(a[2])))
 	}, []tried{{"count", 20, upTo0}, {"mean", 2, upTo0}, {"variance", 1, below0}}},
 	{"EdgeRoughness", func(a []float64) (float64, error) {
 		return doubted(EdgeRoughness(length(a[0]), ratio(a[1]), count(a[2])))
 	}, []tried{{"CD", 1e-8, upTo0}, {"NILS", 2, upTo0}, {"count_in_cell", 100, upTo0}}},
-	{"LWROfLER", func(a []float64) (float64, error) { return plain(LWROfLER(length(a[0]), ratio(a[1]))) },
-		[]tried{{"ler", 1e-9, below0}, {"correlation", 0.2, []float64{-1.01, 1.01}}}},
-	{"LEROfLWR", func(a []float64) (float64, error) { return plain(LEROfLWR(length(a[0]), ratio(a[1]))) },
-		[]tried{{"lwr", 1e-9, below0}, {"correlation", 0.2, []float64{-1.01, 1, 1.01}}}},
+	{
+		"LWROfLER", func(a []float64) (float64, error) { return plain(LWROfLER(length(a[0]), ratio(a[1]))) },
+		[]tried{{"ler", 1e-9, below0}, {"correlation", 0.2, []float64{-1.01, 1.01}}},
+	},
+	{
+		"LEROfLWR", func(a []float64) (float64, error) { return plain(LEROfLWR(length(a[0]), ratio(a[1]))) },
+		[]tried{{"lwr", 1e-9, below0}, {"correlation", 0.2, []float64{-1.01, 1, 1.01}}},
+	},
 	{"DoseForRoughness", func(a []float64) (float64, error) {
 		return doubted(DoseForRoughness(length(a[0]), length(a[1]), units.Fluence(a[2])))
 	}, []tried{{"now", 2e-9, upTo0}, {"target", 1e-9, upTo0}, {"dose", 300, upTo0}}},
@@ -68,35 +75,55 @@ var refusals = []struct {
 	{"LineAverage", func(a []float64) (float64, error) {
 		return plain(LineAverage(length(a[0]), length(a[1]), length(a[2])))
 	}, []tried{{"sigma", 1e-9, below0}, {"correlation_length", 1e-8, upTo0}, {"length", 1e-6, upTo0}}},
-	{"MissingProbability", func(a []float64) (float64, error) { return doubted(MissingProbability(count(a[0]), ratio(a[1]))) },
-		[]tried{{"mean", 90, tooMany}, {"threshold", 0.7, []float64{-0.1, 1e16}}}},
-	{"MergingProbability", func(a []float64) (float64, error) { return doubted(MergingProbability(count(a[0]), ratio(a[1]))) },
-		[]tried{{"mean", 90, tooMany}, {"threshold", 1.2, []float64{-0.1, 1e16}}}},
+	{
+		"MissingProbability", func(a []float64) (float64, error) { return doubted(MissingProbability(count(a[0]), ratio(a[1]))) },
+		[]tried{{"mean", 90, tooMany}, {"threshold", 0.7, []float64{-0.1, 1e16}}},
+	},
+	{
+		"MergingProbability", func(a []float64) (float64, error) { return doubted(MergingProbability(count(a[0]), ratio(a[1]))) },
+		[]tried{{"mean", 90, tooMany}, {"threshold", 1.2, []float64{-0.1, 1e16}}},
+	},
 	{"Log10MissingProbability", func(a []float64) (float64, error) {
 		return plain(Log10MissingProbability(count(a[0]), ratio(a[1])))
 	}, []tried{{"mean", 90, append(upTo0, tooMany...)}, {"threshold", 0.7, []float64{-0.1, 1e16}}}},
 	{"Log10MergingProbability", func(a []float64) (float64, error) {
 		return plain(Log10MergingProbability(count(a[0]), ratio(a[1])))
 	}, []tried{{"mean", 90, append(upTo0, tooMany...)}, {"threshold", 1.2, []float64{-0.1, 1e16}}}},
-	{"MeanForFailure", func(a []float64) (float64, error) { return plain(MeanForFailure(ratio(a[0]), ratio(a[1]))) },
-		[]tried{{"threshold", 0.5, []float64{-0.1, 0.9991, 1, 2}}, {"probability", 1e-10, notBetween}}},
-	{"PoissonAtMost", func(a []float64) (float64, error) { return doubted(PoissonAtMost(count(a[0]), count(a[1]))) },
-		[]tried{{"count", 3, noWhole}, {"mean", 5, tooMany}}},
-	{"PoissonAtLeast", func(a []float64) (float64, error) { return doubted(PoissonAtLeast(count(a[0]), count(a[1]))) },
-		[]tried{{"count", 3, noWhole}, {"mean", 5, tooMany}}},
+	{
+		"MeanForFailure", func(a []float64) (float64, error) { return plain(MeanForFailure(ratio(a[0]), ratio(a[1]))) },
+		[]tried{{"threshold", 0.5, []float64{-0.1, 0.9991, 1, 2}}, {"probability", 1e-10, notBetween}},
+	},
+	{
+		"PoissonAtMost", func(a []float64) (float64, error) { return doubted(PoissonAtMost(count(a[0]), count(a[1]))) },
+		[]tried{{"count", 3, noWhole}, {"mean", 5, tooMany}},
+	},
+	{
+		"PoissonAtLeast", func(a []float64) (float64, error) { return doubted(PoissonAtLeast(count(a[0]), count(a[1]))) },
+		[]tried{{"count", 3, noWhole}, {"mean", 5, tooMany}},
+	},
 	{"BinomialAtLeast", func(a []float64) (float64, error) {
 		return doubted(BinomialAtLeast(count(a[0]), count(a[1]), ratio(a[2])))
 	}, []tried{{"count", 3, append([]float64{9}, noWhole...)}, {"trials", 8, noWhole}, {"p", 0.3, outside01}}},
-	{"NormalAbove", func(a []float64) (float64, error) { return doubted(NormalAbove(ratio(a[0]))) },
-		[]tried{{"z", 3, nil}}},
-	{"NormalQuantile", func(a []float64) (float64, error) { return plain(NormalQuantile(ratio(a[0]))) },
-		[]tried{{"p", 0.3, notBetween}}},
-	{"Failures", func(a []float64) (float64, error) { return plain(Failures(ratio(a[0]), count(a[1]))) },
-		[]tried{{"probability", 0.1, outside01}, {"features", 1e9, below0}}},
-	{"NoFailure", func(a []float64) (float64, error) { return plain(NoFailure(ratio(a[0]), count(a[1]))) },
-		[]tried{{"probability", 1e-9, outside01}, {"features", 1e9, below0}}},
-	{"YieldOf", func(a []float64) (float64, error) { return plain(YieldOf(units.ArealDensity(a[0]), units.Area(a[1]))) },
-		[]tried{{"defect_density", 1e3, below0}, {"area", 1e-4, below0}}},
+	{
+		"NormalAbove", func(a []float64) (float64, error) { return doubted(NormalAbove(ratio(a[0]))) },
+		[]tried{{"z", 3, nil}},
+	},
+	{
+		"NormalQuantile", func(a []float64) (float64, error) { return plain(NormalQuantile(ratio(a[0]))) },
+		[]tried{{"p", 0.3, notBetween}},
+	},
+	{
+		"Failures", func(a []float64) (float64, error) { return plain(Failures(ratio(a[0]), count(a[1]))) },
+		[]tried{{"probability", 0.1, outside01}, {"features", 1e9, below0}},
+	},
+	{
+		"NoFailure", func(a []float64) (float64, error) { return plain(NoFailure(ratio(a[0]), count(a[1]))) },
+		[]tried{{"probability", 1e-9, outside01}, {"features", 1e9, below0}},
+	},
+	{
+		"YieldOf", func(a []float64) (float64, error) { return plain(YieldOf(units.ArealDensity(a[0]), units.Area(a[1]))) },
+		[]tried{{"defect_density", 1e3, below0}, {"area", 1e-4, below0}},
+	},
 	{"RateLimitLow", func(a []float64) (float64, error) {
 		return plain(RateLimitLow(count(a[0]), count(a[1]), ratio(a[2]), count(a[3])))
 	}, limitArguments},
@@ -109,10 +136,14 @@ var refusals = []struct {
 	{"ResistContrast", func(a []float64) (float64, error) {
 		return plain(ResistContrast(units.Fluence(a[0]), units.Fluence(a[1]), Negative))
 	}, []tried{{"dose_half", 80, upTo0}, {"dose_end", 60, []float64{0, -1, 80, 81}}}},
-	{"HalfPitch", func(a []float64) (float64, error) { return plain(HalfPitch(ratio(a[0]), ratio(a[1]), length(a[2]))) },
-		[]tried{{"k1", 0.4, upTo0}, {"NA", 0.33, notBetween}, {"wavelength", 1e-8, upTo0}}},
-	{"K1", func(a []float64) (float64, error) { return plain(K1(length(a[0]), ratio(a[1]), length(a[2]))) },
-		[]tried{{"half_pitch", 1e-8, upTo0}, {"NA", 0.33, notBetween}, {"wavelength", 1e-8, upTo0}}},
+	{
+		"HalfPitch", func(a []float64) (float64, error) { return plain(HalfPitch(ratio(a[0]), ratio(a[1]), length(a[2]))) },
+		[]tried{{"k1", 0.4, upTo0}, {"NA", 0.33, notBetween}, {"wavelength", 1e-8, upTo0}},
+	},
+	{
+		"K1", func(a []float64) (float64, error) { return plain(K1(length(a[0]), ratio(a[1]), length(a[2]))) },
+		[]tried{{"half_pitch", 1e-8, upTo0}, {"NA", 0.33, notBetween}, {"wavelength", 1e-8, upTo0}},
+	},
 	{"DepthOfFocus", func(a []float64) (float64, error) {
 		return plain(DepthOfFocus(ratio(a[0]), ratio(a[1]), length(a[2])))
 	}, []tried{{"NA", 0.33, notBetween}, {"k2", 1, upTo0}, {"wavelength", 1e-8, upTo0}}},
@@ -122,21 +153,33 @@ var refusals = []struct {
 	{"NILS", func(a []float64) (float64, error) {
 		return plain(NILS(units.AttenuationCoefficient(a[0]), length(a[1])))
 	}, []tried{{"slope", 1e8, below0}, {"CD", 1e-8, below0}}},
-	{"TwoBeamNILS", func(a []float64) (float64, error) { return plain(TwoBeamNILS(ratio(a[0]))) },
-		[]tried{{"contrast", 0.8, outside01}}},
-	{"CDShift", func(a []float64) (float64, error) { return plain(CDShift(length(a[0]), ratio(a[1]), ratio(a[2]))) },
-		[]tried{{"CD", 1e-8, upTo0}, {"NILS", 2, upTo0}, {"dose_error", 0.1, []float64{-1.1, 1.1}}}},
-	{"ExposureLatitude", func(a []float64) (float64, error) { return plain(ExposureLatitude(ratio(a[0]), ratio(a[1]))) },
-		[]tried{{"NILS", 2, below0}, {"cd_tolerance", 0.1, outside01}}},
+	{
+		"TwoBeamNILS", func(a []float64) (float64, error) { return plain(TwoBeamNILS(ratio(a[0]))) },
+		[]tried{{"contrast", 0.8, outside01}},
+	},
+	{
+		"CDShift", func(a []float64) (float64, error) { return plain(CDShift(length(a[0]), ratio(a[1]), ratio(a[2]))) },
+		[]tried{{"CD", 1e-8, upTo0}, {"NILS", 2, upTo0}, {"dose_error", 0.1, []float64{-1.1, 1.1}}},
+	},
+	{
+		"ExposureLatitude", func(a []float64) (float64, error) { return plain(ExposureLatitude(ratio(a[0]), ratio(a[1]))) },
+		[]tried{{"NILS", 2, below0}, {"cd_tolerance", 0.1, outside01}},
+	},
 	{"FlareShift", func(a []float64) (float64, error) {
 		return plain(FlareShift(length(a[0]), ratio(a[1]), ratio(a[2]), ratio(a[3]), ratio(a[4])))
 	}, []tried{{"CD", 1e-8, upTo0}, {"NILS", 2, upTo0}, {"flare", 0.05, outside01}, {"density", 0.5, outside01}, {"edge_intensity", 0.3, upTo0}}},
-	{"BlurContrast", func(a []float64) (float64, error) { return plain(BlurContrast(length(a[0]), length(a[1]))) },
-		[]tried{{"sigma", 1e-9, below0}, {"pitch", 1e-8, upTo0}}},
-	{"SigmaOfFWHM", func(a []float64) (float64, error) { return plain(SigmaOfFWHM(length(a[0]))) },
-		[]tried{{"x", 1e-9, below0}}},
-	{"FWHMOfSigma", func(a []float64) (float64, error) { return plain(FWHMOfSigma(length(a[0]))) },
-		[]tried{{"x", 1e-9, below0}}},
+	{
+		"BlurContrast", func(a []float64) (float64, error) { return plain(BlurContrast(length(a[0]), length(a[1]))) },
+		[]tried{{"sigma", 1e-9, below0}, {"pitch", 1e-8, upTo0}},
+	},
+	{
+		"SigmaOfFWHM", func(a []float64) (float64, error) { return plain(SigmaOfFWHM(length(a[0]))) },
+		[]tried{{"x", 1e-9, below0}},
+	},
+	{
+		"FWHMOfSigma", func(a []float64) (float64, error) { return plain(FWHMOfSigma(length(a[0]))) },
+		[]tried{{"x", 1e-9, below0}},
+	},
 	{"WaferErrorOfMask", func(a []float64) (float64, error) {
 		return plain(WaferErrorOfMask(length(a[0]), ratio(a[1]), ratio(a[2])))
 	}, []tried{{"mask_error", 1e-9, nil}, {"MEEF", 1.5, upTo0}, {"reduction", 4, below1}}},
@@ -155,8 +198,10 @@ var refusals = []struct {
 	{"Expansion", func(a []float64) (float64, error) {
 		return plain(Expansion(length(a[0]), units.ExpansionCoefficient(a[1]), units.TemperatureDifference(a[2])))
 	}, []tried{{"length", 0.1, below0}, {"cte", 1e-6, nil}, {"rise", 1, nil}}},
-	{"SiliconCTE", func(a []float64) (float64, error) { return plain(SiliconCTE(units.Temperature(a[0]))) },
-		[]tried{{"temperature", 295, []float64{-1, 0, 119, 1501}}}},
+	{
+		"SiliconCTE", func(a []float64) (float64, error) { return plain(SiliconCTE(units.Temperature(a[0]))) },
+		[]tried{{"temperature", 295, []float64{-1, 0, 119, 1501}}},
+	},
 	{"WaferHeating", func(a []float64) (float64, error) {
 		return doubted(WaferHeating(units.Fluence(a[0]), ratio(a[1]), length(a[2])))
 	}, []tried{{"dose", 300, below0}, {"absorbed", 0.7, outside01}, {"thickness", 1e-3, upTo0}}},
@@ -174,8 +219,12 @@ var (
 	noWhole        = []float64{-1, 2.5, 1e300}
 	tooMany        = []float64{-1, 1e16}
 	noSlant        = []float64{-0.1, math.Pi / 2, 6}
-	limitArguments = []tried{{"events", 3, append([]float64{1001}, noWhole...)}, {"trials", 1000, append([]float64{0}, noWhole...)},
-		{"confidence", 0.95, notBetween}, {"sides", 2, []float64{0, -1, 1.5, 3}}}
+	limitArguments = []tried{
+		{"events", 3, append([]float64{1001}, noWhole...)},
+		{"trials", 1000, append([]float64{0}, noWhole...)},
+		{"confidence", 0.95, notBetween},
+		{"sides", 2, []float64{0, -1, 1.5, 3}},
+	}
 )
 
 // word turns a number that is no index of a word into one out of range.
@@ -243,8 +292,10 @@ func TestEveryFunctionHasARow(t *testing.T) {
 	for _, f := range refusals {
 		rows[f.function] = true
 	}
-	for _, file := range []string{"absorption", "binomial", "blur", "contrast", "failure", "heating", "imaging", "latitude",
-		"lineaverage", "lineedge", "mask", "meanforfailure", "normal", "poisson", "ratelimit", "shotnoise", "silicon", "yield"} {
+	for _, file := range []string{
+		"absorption", "binomial", "blur", "contrast", "failure", "heating", "imaging", "latitude",
+		"lineaverage", "lineedge", "mask", "meanforfailure", "normal", "poisson", "ratelimit", "shotnoise", "silicon", "yield",
+	} {
 		tree, err := parser.ParseFile(token.NewFileSet(), file+".go", nil, parser.SkipObjectResolution)
 		if err != nil {
 			t.Fatal(err)

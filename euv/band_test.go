@@ -45,12 +45,19 @@ func TestBandMean(t *testing.T) {
 	}{
 		{"constant", func(float64) float64 { return 0.7 }, nil, 0.7, 1e-14},
 		{"line", func(l float64) float64 { return l / 13.5e-9 }, nil, 1, 1e-14},
-		{"kink, told", func(l float64) float64 { return math.Abs(l-kink) / width }, []units.Length{kink, 1, 0},
-			((kink-low)*(kink-low) + (high-kink)*(high-kink)) / (2 * width * width), 1e-14},
-		{"kink, not told", func(l float64) float64 { return math.Abs(l-kink) / width }, nil,
-			((kink-low)*(kink-low) + (high-kink)*(high-kink)) / (2 * width * width), 1e-9},
-		{"Gaussian", func(l float64) float64 { return math.Exp(-math.Pow((l-13.45e-9)/0.05e-9, 2)) }, nil,
-			0.05e-9 * math.Sqrt(math.Pi) / 2 * (math.Erf(0.35/0.05) + math.Erf(0.25/0.05)) / width, 1e-12},
+		{
+			"kink, told", func(l float64) float64 { return math.Abs(l-kink) / width },
+			[]units.Length{kink, 1, 0},
+			((kink-low)*(kink-low) + (high-kink)*(high-kink)) / (2 * width * width), 1e-14,
+		},
+		{
+			"kink, not told", func(l float64) float64 { return math.Abs(l-kink) / width }, nil,
+			((kink-low)*(kink-low) + (high-kink)*(high-kink)) / (2 * width * width), 1e-9,
+		},
+		{
+			"Gaussian", func(l float64) float64 { return math.Exp(-math.Pow((l-13.45e-9)/0.05e-9, 2)) }, nil,
+			0.05e-9 * math.Sqrt(math.Pi) / 2 * (math.Erf(0.35/0.05) + math.Erf(0.25/0.05)) / width, 1e-12,
+		},
 		{"step", func(l float64) float64 {
 			if l < kink {
 				return 1

@@ -57,8 +57,10 @@ func longForm(n uint64, rho float64) float64 {
 	return v
 }
 
-var correlations = []float64{0, 1e-300, 1e-12, 0.1, 0.3, 0.5, 0.5000001, 0.7, 0.9, 0.99, 0.9999, 1 - 1e-8, 1 - 1e-12, 1 - 0x1p-53,
-	-1e-300, -1e-12, -0.1, -0.5, -0.7, -0.99, -0.9999, -1 + 1e-8, -1 + 1e-12, -1 + 0x1p-53}
+var correlations = []float64{
+	0, 1e-300, 1e-12, 0.1, 0.3, 0.5, 0.5000001, 0.7, 0.9, 0.99, 0.9999, 1 - 1e-8, 1 - 1e-12, 1 - 0x1p-53,
+	-1e-300, -1e-12, -0.1, -0.5, -0.7, -0.99, -0.9999, -1 + 1e-8, -1 + 1e-12, -1 + 0x1p-53,
+}
 
 func TestDoseNoiseAgainstDoubleSum(t *testing.T) {
 	for _, rho := range correlations {

@@ -90,10 +90,14 @@ func TestExposureRefusals(t *testing.T) {
 		"PulseEnergy":          {call2(euv.PulseEnergy), []argument{power0, above0("repetition", 5e4)}},
 		"CollectorLoss":        {collector(euv.CollectorLoss, euv.Exponential), []argument{rate, pulses}},
 		"CollectorLifeAverage": {collector(euv.CollectorLifeAverage, euv.Exponential), []argument{rate, pulses}},
-		"CollectorLoss, linear": {collector(euv.CollectorLoss, euv.Linear), []argument{rate,
-			{"pulses", 60e9, []float64{-1, 1e12}}}},
-		"CollectorLifeAverage, linear": {collector(euv.CollectorLifeAverage, euv.Linear), []argument{rate,
-			{"pulses", 60e9, []float64{-1, 1e12}}}},
+		"CollectorLoss, linear": {collector(euv.CollectorLoss, euv.Linear), []argument{
+			rate,
+			{"pulses", 60e9, []float64{-1, 1e12}},
+		}},
+		"CollectorLifeAverage, linear": {collector(euv.CollectorLifeAverage, euv.Linear), []argument{
+			rate,
+			{"pulses", 60e9, []float64{-1, 1e12}},
+		}},
 		"Etendue":            {call4(euv.Etendue), []argument{above0("width", 0.026), above0("height", 0.002), {"NA", 0.33, []float64{0, -0.33, 1, 1.35}}, part("fill", 0.5)}},
 		"EnergyPerPass":      {call4(euv.EnergyPerPass), []argument{from0("power_exposing", 1e6), from0("power_idle", 1e6), part("busy", 0.8), above0("throughput", 0.04)}},
 		"CoolingFlow":        {call2(euv.CoolingFlow), []argument{power0, above0("rise", 8)}},

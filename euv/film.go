@@ -44,8 +44,10 @@ func (f Film) transmit(e *Evaluator, dst []units.Ratio) error {
 }
 
 func (f Film) reflect(*Evaluator, []units.Ratio) error {
-	return &BodyError{Body: f.String(), Asked: "reflectivity",
-		Why: "a film here absorbs only; ask for that of a stack of one layer"}
+	return &BodyError{
+		Body: f.String(), Asked: "reflectivity",
+		Why: "a film here absorbs only; ask for that of a stack of one layer",
+	}
 }
 
 // absorb writes what passes a number of formula units per area.

@@ -60,8 +60,10 @@ func (g GasColumn) transmit(e *Evaluator, dst []units.Ratio) error {
 	case g.Formula.c == nil:
 		return &FormulaError{Why: "a gas column needs the formula of its molecule"}
 	case e.light.sinSq > 0:
-		return &BodyError{Body: g.String(), Asked: "transmittance at an angle",
-			Why: "the path of a gas column is that of the light already; state that path and leave the angle at 0"}
+		return &BodyError{
+			Body: g.String(), Asked: "transmittance at an angle",
+			Why: "the path of a gas column is that of the light already; state that path and leave the angle at 0",
+		}
 	}
 	perArea, err := answer("molecules per area",
 		units.ArealDensity(float64(g.Pressure)/(BoltzmannConstant*float64(g.Temperature))*float64(g.Path)))

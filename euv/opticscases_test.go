@@ -240,8 +240,10 @@ func (c *opticsCase) freeFilm() {
 }
 
 func (c *opticsCase) gas() {
-	g := GasColumn{Formula: sure(ParseFormula(c.Inputs["formula"].(string))), Pressure: 1,
-		Path: units.Length(c.num("pressure_path_Pa_m")), Temperature: units.Temperature(c.num("temperature_K"))}
+	g := GasColumn{
+		Formula: sure(ParseFormula(c.Inputs["formula"].(string))), Pressure: 1,
+		Path: units.Length(c.num("pressure_path_Pa_m")), Temperature: units.Temperature(c.num("temperature_K")),
+	}
 	l := inNm(c.num("wavelength_nm"))
 	passes := sure(Transmittance(g, l, 0, Unpolarised))
 	if len(passes.Warnings) != 1 {
@@ -455,8 +457,10 @@ func pairMaterial(v any) Material {
 
 func (c *opticsCase) grazingFilm() {
 	film := c.Inputs["film"]
-	s := Stack{Substrate: pairMaterial(c.Inputs["substrate"]),
-		Repeats: []Repeat{Once(Layer{Medium: pairMaterial(film), Thickness: inNm(film.([]any)[2].(float64))})}}
+	s := Stack{
+		Substrate: pairMaterial(c.Inputs["substrate"]),
+		Repeats:   []Repeat{Once(Layer{Medium: pairMaterial(film), Thickness: inNm(film.([]any)[2].(float64))})},
+	}
 	for i, angle := range list(c.Inputs["grazing_angle_deg"]) {
 		for pol, key := range map[Polarization]string{PolarizationS: "R_s", PolarizationP: "R_p", Unpolarised: "R_unpolarised"} {
 			c.abs(float64(sure(Reflectivity(s, inNm(c.num("wavelength_nm")), degrees(90-angle), pol, 0)).Value), 1e-8, key, i)

@@ -171,6 +171,7 @@ func TestRandomStacksAgreeWithRecursion(t *testing.T) {
 	}
 	t.Logf("largest difference %.2g", worst)
 }
+
 func TestLosslessAgreesWithRecursion(t *testing.T) {
 	rng := rand.New(rand.NewPCG(1, 2))
 	worst := 0.0

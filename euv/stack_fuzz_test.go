@@ -34,8 +34,12 @@ func (n *numbers) float(low, high float64) float64 {
 }
 
 func (n *numbers) stack() Stack {
-	media := []Medium{Index{}, Index{n.float(-0.2, 0.9), n.float(0, 1)}, Index{n.float(-0.01, 0.2), 0},
-		sure(SolidElement("Si")), sure(SolidElement("Mo")), sure(SolidElement("Sn")), nil}
+	media := []Medium{
+		Index{},
+		Index{n.float(-0.2, 0.9), n.float(0, 1)},
+		Index{n.float(-0.01, 0.2), 0},
+		sure(SolidElement("Si")), sure(SolidElement("Mo")), sure(SolidElement("Sn")), nil,
+	}
 	var s Stack
 	for range n.whole(4) {
 		r := Repeat{Times: n.whole(100)}

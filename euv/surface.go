@@ -39,6 +39,8 @@ func (s Surface) reflect(e *Evaluator, dst []units.Ratio) error {
 }
 
 func (s Surface) transmit(*Evaluator, []units.Ratio) error {
-	return &BodyError{Body: s.String(), Asked: "transmittance",
-		Why: "it is a half space without an end; ask for that of a film, which has a thickness"}
+	return &BodyError{
+		Body: s.String(), Asked: "transmittance",
+		Why: "it is a half space without an end; ask for that of a film, which has a thickness",
+	}
 }

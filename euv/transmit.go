@@ -7,8 +7,10 @@ func (s Stack) transmit(e *Evaluator, dst []units.Ratio) error {
 		return err
 	}
 	if s.Substrate != nil {
-		return &BodyError{Body: s.String(), Asked: "transmittance",
-			Why: "the light ends in the substrate, which has no other side; leave the substrate out, or make it a layer"}
+		return &BodyError{
+			Body: s.String(), Asked: "transmittance",
+			Why: "the light ends in the substrate, which has no other side; leave the substrate out, or make it a layer",
+		}
 	}
 	return e.lanes(&s, dst, "transmittance", (*wave).transmittance)
 }
@@ -18,8 +20,10 @@ func (s Stack) checkTransmits(asked string) error {
 		return err
 	}
 	if s.isRough() {
-		return &BodyError{Body: "a stack with rough interfaces", Asked: asked,
-			Why: "the roughness factor is known for reflection only; ask for that of the smooth stack"}
+		return &BodyError{
+			Body: "a stack with rough interfaces", Asked: asked,
+			Why: "the roughness factor is known for reflection only; ask for that of the smooth stack",
+		}
 	}
 	return nil
 }

@@ -46,8 +46,10 @@ func polarization(word string) euv.Polarization {
 // question makes the node of what a body does to light.
 func question(c *program.Checker, k *program.Call, q *asked, own []*program.Node) *program.Node {
 	q.numbers = len(k.Args[0].Numbers())
-	f := &program.Function{Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "angle"}, {Name: "roughness"}},
-		Call: q.call, Spectral: q.spectral, Kinks: q.kinks}
+	f := &program.Function{
+		Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "angle"}, {Name: "roughness"}},
+		Call: q.call, Spectral: q.spectral, Kinks: q.kinks,
+	}
 	return c.Made(f, append(own, k.Args[0].Numbers()...), program.Type{}, k.Tree.Where)
 }
 
@@ -59,11 +61,13 @@ func buildMaterial(d units.Dimension, ask func(euv.Material, units.Length) (floa
 			return nil, err
 		}
 		q := &asked{body: m, numbers: 1}
-		f := &program.Function{Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "density"}}, Kinks: q.kinks,
+		f := &program.Function{
+			Name: k.Func.Name, Params: []program.Param{{Name: "wavelength"}, {Name: "density"}}, Kinks: q.kinks,
 			Call: func(x []float64) (float64, []string, error) {
 				v, err := ask(m.at(x[1]), units.Length(x[0]))
 				return v, euv.Surface{Medium: m.at(x[1])}.Warnings(), fault(err)
-			}}
+			},
+		}
 		return c.Made(f, []*program.Node{k.Args[1], k.Args[0].Numbers()[0]}, program.Type{Dim: d}, k.Tree.Where), nil
 	}
 }

@@ -70,6 +70,9 @@ func (b *Budget) lines(style Style) []Line {
 		out = append(out, Line{"the inputs leave no uncertainty", Plain})
 		return append(out, warningLines(b.Of.Warnings)...)
 	}
+	if slices.ContainsFunc(b.Rows, func(r Share) bool { return r.Part < 0 || r.Part > 1 }) {
+		out = append(out, Line{"the inputs are correlated, so that shares may lie below 0 and above 1; they add up to 1", Plain})
+	}
 	unit := b.Of.Unit
 	dof := "infinitely many effective degrees of freedom"
 	if b.Of.DoF > 0 {

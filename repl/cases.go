@@ -51,8 +51,10 @@ func (s *Session) settings(w *whatIf, c *program.Checker) (map[string]*program.N
 			return nil, err
 		}
 		if _, fits := inPlaceOf(d.node.Type, n.Type); !fits {
-			return nil, &syntax.Error{Marks: []syntax.Span{set.X.Span()}, Msg: fmt.Sprintf("%s is %s, not %s", set.Name, s.pointOr(d.node.Type), s.pointOr(n.Type)),
-				Hint: "a case keeps the dimension and plane of each name", Cause: program.Differ("set", n.Type, d.node.Type)}
+			return nil, &syntax.Error{
+				Marks: []syntax.Span{set.X.Span()}, Msg: fmt.Sprintf("%s is %s, not %s", set.Name, s.pointOr(d.node.Type), s.pointOr(n.Type)),
+				Hint: "a case keeps the dimension and plane of each name", Cause: program.Differ("set", n.Type, d.node.Type),
+			}
 		}
 		sets[set.Name] = n
 	}

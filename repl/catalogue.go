@@ -15,8 +15,10 @@ var catalogue = sync.OnceValue(func() map[string]*program.Function {
 	for _, f := range mathsFunctions() {
 		rows[f.Name] = f
 	}
-	for _, section := range [][]Function{photonRows(), bodyRows(), peakRows(), distributionRows(), mirrorRows(), chainRows(), sourceRows(), exposureRows(),
-		resistRows(), statisticsRows(), imagingRows(), maskRows()} {
+	for _, section := range [][]Function{
+		photonRows(), bodyRows(), peakRows(), distributionRows(), mirrorRows(), chainRows(), sourceRows(), exposureRows(),
+		resistRows(), statisticsRows(), imagingRows(), maskRows(),
+	} {
 		for _, f := range section {
 			rows[f.row.Name] = f.row
 		}

@@ -15,7 +15,8 @@ func distributionRows() []Function {
 			Source: "JCGM 101:2008, 6.4.2, 6.4.5, 6.4.7", Example: example,
 			Build: func(c *program.Checker, k *program.Call) (*program.Node, error) {
 				return c.Distribution(shape, k)
-			}}}
+			},
+		}}
 	}
 	a, b := program.Param{Name: "low", Any: true, Doc: "lower limit"}, program.Param{Name: "high", Any: true, Doc: "upper limit"}
 	return []Function{

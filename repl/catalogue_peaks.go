@@ -9,9 +9,11 @@ import (
 
 // peakRow is a row about the peak of a stack alone.
 func peakRow(name, summary string, result program.Result, take func(euv.Peak) (float64, error)) *program.Function {
-	f := &program.Function{Name: name, Section: bodySection, Summary: summary, Result: result,
+	f := &program.Function{
+		Name: name, Section: bodySection, Summary: summary, Result: result,
 		Params:  []program.Param{{Name: "stack", Kind: program.BodyKind}, angleParam(), lengthParam("near", "13.5 nm", "the peak is looked for within 10 % of it, up to the next absorption edge")},
-		Formula: "the highest maximum of the reflectivity", Valid: "unpolarised light", Source: "as reflectivity", Example: name + "(std)"}
+		Formula: "the highest maximum of the reflectivity", Valid: "unpolarised light", Source: "as reflectivity", Example: name + "(std)",
+	}
 	f.Build = func(c *program.Checker, k *program.Call) (*program.Node, error) { return buildPeak(c, k, result, take) }
 	return f
 }

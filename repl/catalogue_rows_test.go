@@ -155,8 +155,10 @@ func TestRowsSayAll(t *testing.T) {
 
 // conventions are arguments that people mean in more than one way: their row
 // says which is meant, also where one is missing. The first six have no default.
-var conventions = []string{"of", "sigmas", "tone", "model", "sides", "passes", "attenuation", "half_pitch", "pitch",
-	"sigma", "roughness", "reduction", "k2", "confidence", "chief_ray"}
+var conventions = []string{
+	"of", "sigmas", "tone", "model", "sides", "passes", "attenuation", "half_pitch", "pitch",
+	"sigma", "roughness", "reduction", "k2", "confidence", "chief_ray",
+}
 
 func TestRowExamples(t *testing.T) {
 	for _, f := range inOrderOfName() {

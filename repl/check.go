@@ -75,8 +75,10 @@ func (s *Session) within(ctx context.Context, a *syntax.Check, v *Verdict, c *pr
 		band *= math.Abs(v.Right.SI)
 	case have == v.Right.Unit.Dimension():
 	default:
-		return nil, &syntax.Error{Marks: []syntax.Span{a.Within.Span()}, Msg: "within is a fraction of the right side or a quantity of its dimension, not " + s.describe(program.Type{Dim: have}),
-			Hint: "write within 2 %, or within 1 " + s.sys.UnitText(v.Right.Unit.Dimension()), Cause: &units.DimensionError{Op: "compare", Have: have, Rhs: v.Right.Unit.Dimension()}}
+		return nil, &syntax.Error{
+			Marks: []syntax.Span{a.Within.Span()}, Msg: "within is a fraction of the right side or a quantity of its dimension, not " + s.describe(program.Type{Dim: have}),
+			Hint: "write within 2 %, or within 1 " + s.sys.UnitText(v.Right.Unit.Dimension()), Cause: &units.DimensionError{Op: "compare", Have: have, Rhs: v.Right.Unit.Dimension()},
+		}
 	}
 	v.Within = w
 	v.Holds = math.Abs(v.Left.SI-v.Right.SI) <= band

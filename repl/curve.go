@@ -19,8 +19,10 @@ func buildCurve(c *program.Checker, k *program.Call) (*program.Node, error) {
 		return nil, &syntax.Error{Marks: []syntax.Span{k.Exprs[0].Span(), k.Exprs[2].Span()}, Msg: "xs and x of curve are of one dimension", Hint: k.Func.Signature(), Cause: &units.DimensionError{Op: "compare", Have: xs.Type.Dim, Rhs: x.Type.Dim}}
 	}
 	t := measured{x.Type.Dim}
-	f := &program.Function{Name: "curve", Params: []program.Param{{Name: "x"}, {Name: "xs"}, {Name: "ys"}}, Call: t.call, Spectral: t.spectral,
-		Kinks: func(low, high float64) []float64 { return pointsBetween(low, high, xs, c.Scope) }}
+	f := &program.Function{
+		Name: "curve", Params: []program.Param{{Name: "x"}, {Name: "xs"}, {Name: "ys"}}, Call: t.call, Spectral: t.spectral,
+		Kinks: func(low, high float64) []float64 { return pointsBetween(low, high, xs, c.Scope) },
+	}
 	return c.Made(f, []*program.Node{x, xs, ys}, program.Item(ys), k.Tree.Where), nil
 }
 

@@ -68,9 +68,11 @@ func (s *Session) nameable(name string, at syntax.Span, x syntax.Expr) error {
 	var self *syntax.Error
 	syntax.Each(x, func(x syntax.Expr) {
 		if n, ok := x.(*syntax.Name); ok && n.Name == name && self == nil {
-			self = &syntax.Error{Marks: []syntax.Span{at, n.Where}, Cause: ErrCircle,
+			self = &syntax.Error{
+				Marks: []syntax.Span{at, n.Where}, Cause: ErrCircle,
 				Msg:  name + " would rest on itself",
-				Hint: "a name stands for its formula; give the new value another name, such as " + name + "_2"}
+				Hint: "a name stands for its formula; give the new value another name, such as " + name + "_2",
+			}
 		}
 	})
 	if self != nil {

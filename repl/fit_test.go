@@ -100,8 +100,10 @@ func TestExampleData(t *testing.T) {
 }
 
 func TestFitForms(t *testing.T) {
-	f := inFolder(map[string]string{"exact.csv": "x,y\n1,2\n2,4\n3,6\n", "two.csv": "x,y\n1,2\n2,5\n", "one.csv": "x,y\n1,2\n", "flat.csv": "x,y\n1,2\n1,4\n",
-		"down.csv": "x / nm,y / %\n1,30\n2,21\n3,9\n", "hot.csv": "T / degC,R / ohm\n20,100\n40,108\n60,115.5\n"})
+	f := inFolder(map[string]string{
+		"exact.csv": "x,y\n1,2\n2,4\n3,6\n", "two.csv": "x,y\n1,2\n2,5\n", "one.csv": "x,y\n1,2\n", "flat.csv": "x,y\n1,2\n1,4\n",
+		"down.csv": "x / nm,y / %\n1,30\n2,21\n3,9\n", "hot.csv": "T / degC,R / ohm\n20,100\n40,108\n60,115.5\n",
+	})
 	s := NewSession(f.config())
 	spoken(t, s, `data E = "exact.csv"`, `data W = "two.csv"`, `data O = "one.csv"`, `data F = "flat.csv"`, `data D = "down.csv"`, `data H = "hot.csv"`, "m = 1", "n = 0", "k = 2")
 	// An exact fit has no uncertainty, and what rests on it works.

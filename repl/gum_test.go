@@ -232,8 +232,10 @@ func TestStatementsOfUncertainty(t *testing.T) {
 	asPublished(t, "GUM-4.3", "±0.40e-6 /°C rectangular -> u", valued(t, s, "rectangular(16.12e-6 /K, 16.92e-6 /K)").U)
 	asPublished(t, "GUM-4.3", "-> u / uV", 1e6*valued(t, s, "rectangular(0.928556001 V, 0.928585999 V)").U)
 	asPublished(t, "GUM-4.3", "resolution dx -> u/dx", valued(t, s, "rectangular(0, 1)").U)
-	for _, form := range []string{"100.02147(35) g", "100.02147(0.00035) g", "(100.02147 ± 0.00035) g", "100.02147 g ± 0.35 mg",
-		"(100.02147 ± 0.00070) g (k=2)", "100.02147 g ± 0.70 mg (k=2)", "100.02147 g ± 3.4992487 ppm"} {
+	for _, form := range []string{
+		"100.02147(35) g", "100.02147(0.00035) g", "(100.02147 ± 0.00035) g", "100.02147 g ± 0.35 mg",
+		"(100.02147 ± 0.00070) g (k=2)", "100.02147 g ± 0.70 mg (k=2)", "100.02147 g ± 3.4992487 ppm",
+	} {
 		v := valued(t, s, form)
 		near.Rel(t, form, v.SI, 0.10002147, 1e-15)
 		near.Rel(t, "u of "+form, v.U, 0.35e-6, 1e-6)
@@ -324,7 +326,8 @@ func TestCertifiedStatistics(t *testing.T) {
 		near.Rel(t, set.Name+" mean", valued(t, s, "mean(S.x)").SI, parsed(t, set.Exact.Mean), 4e-16)
 		near.Rel(t, set.Name+" sd", valued(t, s, "sd(S.x)").SI, parsed(t, set.Exact.SD), map[string]float64{
 			"NumAcc2": 1e-14, "NumAcc3": 4e-10, "NumAcc4": 6e-9, // the data are not exact in binary: they are 12, 1e7 and 1e8 times the spread
-			"Michelso": 4e-14, "Mavro": 2e-13}[set.Name]+4e-16)
+			"Michelso": 4e-14, "Mavro": 2e-13,
+		}[set.Name]+4e-16)
 	}
 	if seen < 8 {
 		t.Errorf("only %d sets", seen)

@@ -79,7 +79,8 @@ func overview() []string {
 		"  P = 250 W at IF  # a note           a definition, live; IF is its plane",
 		"  photon_count(30 mJ/cm^2, 400 nm^2)  a named function",
 		"  P / 3 [W]                           a bracket states the answer in that unit",
-		""}, topicList()...)
+		"",
+	}, topicList()...)
 }
 
 func topicList() []string {

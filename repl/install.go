@@ -16,8 +16,10 @@ func (s *Session) install(d *definition, at syntax.Span) error {
 		return e
 	}
 	if old := s.store.defs[d.name]; old != nil && s.clash(old, d) {
-		return &syntax.Error{Marks: []syntax.Span{at}, Msg: d.name + " is defined in " + s.where(d.name) + " already",
-			Hint: "rename one of the two, or forget " + d.name + " before the import", Cause: ErrFile}
+		return &syntax.Error{
+			Marks: []syntax.Span{at}, Msg: d.name + " is defined in " + s.where(d.name) + " already",
+			Hint: "rename one of the two, or forget " + d.name + " before the import", Cause: ErrFile,
+		}
 	}
 	if err := s.definitionsFit(d.name, at); err != nil {
 		return err
@@ -131,9 +133,11 @@ func (s *Session) breaks(d *definition, at syntax.Span, broken []string, first e
 	if len(broken) > 1 {
 		verb = "rest"
 	}
-	return &syntax.Error{Marks: []syntax.Span{at}, Cause: ErrDependent,
+	return &syntax.Error{
+		Marks: []syntax.Span{at}, Cause: ErrDependent,
 		Msg:  fmt.Sprintf("%s %s on %s and would break: %s", strings.Join(named, ", "), verb, d.name, reason),
-		Hint: "nothing has changed; redefine " + broken[0] + " first, or use another name here"}
+		Hint: "nothing has changed; redefine " + broken[0] + " first, or use another name here",
+	}
 }
 
 // describe says what a type is, as "power (W) at IF".

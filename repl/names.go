@@ -116,8 +116,10 @@ func (s *Session) forget(j job) ([]Result, error) {
 			if n := len(users) - 8; n > 0 {
 				shown += " and " + strconv.Itoa(n) + " more"
 			}
-			return nil, &syntax.Error{Marks: []syntax.Span{n.Where}, Msg: "others rest on " + n.Name + ": " + shown,
-				Hint: "forget those first, or all together: forget " + n.Name + ", " + strings.Join(users[:min(len(users), 3)], ", "), Cause: ErrDependent}
+			return nil, &syntax.Error{
+				Marks: []syntax.Span{n.Where}, Msg: "others rest on " + n.Name + ": " + shown,
+				Hint: "forget those first, or all together: forget " + n.Name + ", " + strings.Join(users[:min(len(users), 3)], ", "), Cause: ErrDependent,
+			}
 		}
 	}
 	for _, n := range c.Names {

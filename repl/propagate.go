@@ -39,8 +39,10 @@ func (d *Distribution) lines(style Style) []Line {
 		{"mean", u.Label(in(d.Mean.SI)), "± " + step(d.Tolerance.Mean)},
 		{"standard uncertainty", u.Interval().Label(units.FormatNumber(u.FromDifference(d.Mean.U), style.Digits)), "± " + step(d.Tolerance.U)},
 		{"skewness", units.FormatNumber(d.Skewness, 2), ""},
-		{fmt.Sprintf("shortest %s %% interval", units.FormatNumber(100*d.Coverage, 4)), fmt.Sprintf("%s to %s", u.Label(in(d.Low)), u.Label(in(d.High))),
-			fmt.Sprintf("± %s and %s", step(d.Tolerance.Low), step(d.Tolerance.High))},
+		{
+			fmt.Sprintf("shortest %s %% interval", units.FormatNumber(100*d.Coverage, 4)), fmt.Sprintf("%s to %s", u.Label(in(d.Low)), u.Label(in(d.High))),
+			fmt.Sprintf("± %s and %s", step(d.Tolerance.Low), step(d.Tolerance.High)),
+		},
 	}
 	if d.Tolerance.Mean == 0 {
 		for i := range rows {

@@ -3,6 +3,7 @@ package repl
 import (
 	"fmt"
 	"io"
+	"io/fs"
 	"strings"
 	"unicode/utf8"
 
@@ -41,6 +42,9 @@ func (s *Session) save(j job) ([]Result, error) {
 	if s.config.Create == nil {
 		return nil, &syntax.Error{Marks: []syntax.Span{c.TextAt}, Msg: "this session writes no files", Hint: "copy the transcript instead", Cause: ErrFile}
 	}
+	if err := s.replaces(c); err != nil {
+		return nil, err
+	}
 	err := s.write(syntax.String{Text: c.Text, Where: c.TextAt}, func(w io.Writer) error {
 		_, err := w.Write(s.Transcript())
 		return err
@@ -55,4 +59,24 @@ func (s *Session) save(j job) ([]Result, error) {
 		}
 	}
 	return []Result{&Text{content: []string{fmt.Sprintf("%d statements and notes are in %s", n, c.Text)}}}, nil
+}
+
+// replaces refuses once to write over a file that this session did not write.
+func (s *Session) replaces(c *syntax.Command) error {
+	full, err := s.inside(c.Text)
+	if err != nil || s.config.Files == nil || s.silent {
+		return nil // write says what is wrong
+	}
+	known := s.saved[full]
+	if s.saved == nil {
+		s.saved = map[string]bool{}
+	}
+	s.saved[full] = true
+	if _, err := fs.Stat(s.config.Files, full); err != nil || known {
+		return nil
+	}
+	return &syntax.Error{
+		Marks: []syntax.Span{c.TextAt}, Msg: c.Text + " is there already, and this session did not write it",
+		Hint: "choose another name, or say it again to replace the file", Cause: ErrFile,
+	}
 }

@@ -63,8 +63,9 @@ type Session struct {
 	pairings  []pairing           // correlations of inputs
 	tables    map[string][]string // columns of each data table
 	cases     map[string]*whatIf
-	silent    bool // a replay, which writes nothing
-	steps     int  // statements run so far, those of imports included
+	saved     map[string]bool // files that this session wrote, or was asked twice to
+	silent    bool            // a replay, which writes nothing
+	steps     int             // statements run so far, those of imports included
 }
 
 // origin is the file and line of a statement; the zero value is the prompt.

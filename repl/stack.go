@@ -168,8 +168,10 @@ func (w *stacking) substrate(line syntax.BlockLine) error {
 func (w *stacking) material(name syntax.Name) (*materialBody, int, error) {
 	n := w.c.Material(name.Name)
 	if n == nil {
-		return nil, 0, &syntax.Error{Marks: []syntax.Span{name.Where}, Msg: name.Name + " is no material that is known here",
-			Hint: "element symbols are known; others are named by " + namingMaterial(name.Name), Cause: ErrUnknown}
+		return nil, 0, &syntax.Error{
+			Marks: []syntax.Span{name.Where}, Msg: name.Name + " is no material that is known here",
+			Hint: "element symbols are known; others are named by " + namingMaterial(name.Name), Cause: ErrUnknown,
+		}
 	}
 	return n.Body().(*materialBody), w.add(n.Numbers()[0]), nil
 }

@@ -187,9 +187,11 @@ func (s *Session) correlation(j job) ([]Result, error) {
 	}
 	if err := s.fitTogether(); err != nil {
 		s.pairings = before
-		return nil, &syntax.Error{Marks: []syntax.Span{a.X.Span()}, Cause: err,
+		return nil, &syntax.Error{
+			Marks: []syntax.Span{a.X.Span()}, Cause: err,
 			Msg:  "this does not go with the other correlations of " + a.A.Name + " and " + a.B.Name + ": together they leave a variance below zero",
-			Hint: "the coefficients of all pairs must allow one another; nothing has changed"}
+			Hint: "the coefficients of all pairs must allow one another; nothing has changed",
+		}
 	}
 	return nil, nil
 }

@@ -89,8 +89,10 @@ func (s *Session) known(c *program.Checker, v *varied, a syntax.Axis) error {
 	have, given := d.node.Type, v.typ
 	var fits bool
 	if v.typ, fits = inPlaceOf(have, given); !fits {
-		return &syntax.Error{Marks: []syntax.Span{a.From.Span()}, Msg: fmt.Sprintf("%s is %s; this range is %s", v.name, s.pointOr(have), s.pointOr(given)),
-			Hint: "give the range the dimension and plane of " + s.where(v.name) + ", or use a new name", Cause: program.Differ("vary", given, have)}
+		return &syntax.Error{
+			Marks: []syntax.Span{a.From.Span()}, Msg: fmt.Sprintf("%s is %s; this range is %s", v.name, s.pointOr(have), s.pointOr(given)),
+			Hint: "give the range the dimension and plane of " + s.where(v.name) + ", or use a new name", Cause: program.Differ("vary", given, have),
+		}
 	}
 	if d.unit != nil {
 		v.unit = *d.unit

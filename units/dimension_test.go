@@ -109,11 +109,26 @@ func TestDimensionPow(t *testing.T) {
 		want     string
 		err      error
 	}{
-		{area, 1, 2, "m", nil}, {length, 1, 2, "m^(1/2)", nil}, {length, 1, 3, "m^(1/3)", nil}, {length, -1, 6, "m^(-1/6)", nil},
-		{length, 1, 4, "1", ErrRoot}, {length, 1, 5, "1", ErrRoot}, {length, 1, 0, "1", ErrRoot}, {Dimension{}, 1, 7, "1", nil},
-		{length, 21, 1, "m²¹", nil}, {length, 22, 1, "1", ErrExponent}, {length, -21, 1, "m⁻²¹", nil}, {length, -22, 1, "1", ErrExponent},
-		{area, 21, 2, "m²¹", nil}, {length, 1000, 1, "1", ErrExponent}, {length, 1 << 40, 1 << 39, "m²", nil}, {length, 3, -2, "m^(-3/2)", nil},
-		{dimFluence, 2, 1, "kg²·s⁻⁴", nil}, {length, 0, 5, "1", nil}, {dimVolume, 1, 6, "m^(1/2)", nil}, {dimVolume, 1, 12, "1", ErrRoot},
+		{area, 1, 2, "m", nil},
+		{length, 1, 2, "m^(1/2)", nil},
+		{length, 1, 3, "m^(1/3)", nil},
+		{length, -1, 6, "m^(-1/6)", nil},
+		{length, 1, 4, "1", ErrRoot},
+		{length, 1, 5, "1", ErrRoot},
+		{length, 1, 0, "1", ErrRoot},
+		{Dimension{}, 1, 7, "1", nil},
+		{length, 21, 1, "m²¹", nil},
+		{length, 22, 1, "1", ErrExponent},
+		{length, -21, 1, "m⁻²¹", nil},
+		{length, -22, 1, "1", ErrExponent},
+		{area, 21, 2, "m²¹", nil},
+		{length, 1000, 1, "1", ErrExponent},
+		{length, 1 << 40, 1 << 39, "m²", nil},
+		{length, 3, -2, "m^(-3/2)", nil},
+		{dimFluence, 2, 1, "kg²·s⁻⁴", nil},
+		{length, 0, 5, "1", nil},
+		{dimVolume, 1, 6, "m^(1/2)", nil},
+		{dimVolume, 1, 12, "1", ErrRoot},
 		{dimVolume, 2, 3, "m²", nil},
 	} {
 		got, err := c.d.Pow(c.num, c.den)

@@ -86,11 +86,25 @@ func TestWholeSymbols(t *testing.T) {
 		word, same string
 		not        string
 	}{
-		{"min", "s", "milli-inch"}, {"cd", "lm/sr", "centi-day"}, {"Pa", "N/m^2", "peta-year"}, {"mol", "kat*s", "milli-ol"},
-		{"T", "Wb/m^2", "tera"}, {"mT", "mWb/m^2", "milli-tera"}, {"h", "s", "hecto"}, {"ha", "m^2", "hecto-year"},
-		{"Gy", "J/kg", "giga-year"}, {"rad", "m/m", "0.01 Gy"}, {"meV", "J", "exponent e"}, {"dam", "m", "deci-year"},
-		{"as", "s", "arcsecond"}, {"au", "m", "atto-dalton"}, {"PS", "PA/V", "horse power"}, {"mirror", "1", "milli-irror"},
-		{"pulse", "pulse", "pico-ulse"}, {"field", "field", "femto-ield"}, {"die", "die", "deci-ie"},
+		{"min", "s", "milli-inch"},
+		{"cd", "lm/sr", "centi-day"},
+		{"Pa", "N/m^2", "peta-year"},
+		{"mol", "kat*s", "milli-ol"},
+		{"T", "Wb/m^2", "tera"},
+		{"mT", "mWb/m^2", "milli-tera"},
+		{"h", "s", "hecto"},
+		{"ha", "m^2", "hecto-year"},
+		{"Gy", "J/kg", "giga-year"},
+		{"rad", "m/m", "0.01 Gy"},
+		{"meV", "J", "exponent e"},
+		{"dam", "m", "deci-year"},
+		{"as", "s", "arcsecond"},
+		{"au", "m", "atto-dalton"},
+		{"PS", "PA/V", "horse power"},
+		{"mirror", "1", "milli-irror"},
+		{"pulse", "pulse", "pico-ulse"},
+		{"field", "field", "femto-ield"},
+		{"die", "die", "deci-ie"},
 	} {
 		if got, want := parse(t, c.word).dim, parse(t, c.same).dim; got != want {
 			t.Errorf("%s is %s, want %s (and not %s)", c.word, got, want, c.not)

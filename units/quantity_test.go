@@ -60,15 +60,23 @@ func TestQuantityErrors(t *testing.T) {
 		err  error
 		want error
 	}{
-		{"m + m²", keep(length.Add(area)), ErrDimension}, {"m − m²", keep(length.Sub(area)), ErrDimension},
-		{"m < m²", order(length.Compare(area)), ErrDimension}, {"huge + huge", keep(huge.Add(huge)), ErrNotFinite},
-		{"−huge − huge", keep(New(-1e308, dimLength).Sub(huge)), ErrNotFinite}, {"huge · huge", keep(huge.Mul(huge)), ErrNotFinite},
-		{"m / 0", keep(length.Div(zero)), ErrNotFinite}, {"0 / 0", keep(zero.Div(zero)), ErrNotFinite},
+		{"m + m²", keep(length.Add(area)), ErrDimension},
+		{"m − m²", keep(length.Sub(area)), ErrDimension},
+		{"m < m²", order(length.Compare(area)), ErrDimension},
+		{"huge + huge", keep(huge.Add(huge)), ErrNotFinite},
+		{"−huge − huge", keep(New(-1e308, dimLength).Sub(huge)), ErrNotFinite},
+		{"huge · huge", keep(huge.Mul(huge)), ErrNotFinite},
+		{"m / 0", keep(length.Div(zero)), ErrNotFinite},
+		{"0 / 0", keep(zero.Div(zero)), ErrNotFinite},
 		{"m / −0", keep(length.Div(New(math.Copysign(0, -1), dimLength))), ErrNotFinite},
-		{"0^-1", keep(zero.Pow(-1, 1)), ErrNotFinite}, {"√−1", keep(New(-1, Dimension{}).Pow(1, 2)), ErrNotFinite},
-		{"m^(1/4)", keep(length.Pow(1, 4)), ErrRoot}, {"m^(1/0)", keep(length.Pow(1, 0)), ErrRoot},
-		{"m²¹ · m", keep(far.Mul(length)), ErrExponent}, {"m²¹ / m⁻¹", keep(far.Div(New(1, dimPerLength))), ErrExponent},
-		{"m^22", keep(length.Pow(22, 1)), ErrExponent}, {"huge²", keep(huge.Pow(2, 1)), ErrNotFinite},
+		{"0^-1", keep(zero.Pow(-1, 1)), ErrNotFinite},
+		{"√−1", keep(New(-1, Dimension{}).Pow(1, 2)), ErrNotFinite},
+		{"m^(1/4)", keep(length.Pow(1, 4)), ErrRoot},
+		{"m^(1/0)", keep(length.Pow(1, 0)), ErrRoot},
+		{"m²¹ · m", keep(far.Mul(length)), ErrExponent},
+		{"m²¹ / m⁻¹", keep(far.Div(New(1, dimPerLength))), ErrExponent},
+		{"m^22", keep(length.Pow(22, 1)), ErrExponent},
+		{"huge²", keep(huge.Pow(2, 1)), ErrNotFinite},
 		{"NaN + 1", keep(New(math.NaN(), Dimension{}).Add(New(1, Dimension{}))), ErrNotFinite},
 	} {
 		if !errors.Is(c.err, c.want) {

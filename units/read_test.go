@@ -124,16 +124,46 @@ func TestReadRefusals(t *testing.T) {
 		text, unit string
 		want       error
 	}{
-		{"", "m", ErrNumber}, {"-", "m", ErrNumber}, {"+1", "m", ErrNumber}, {".5", "m", ErrNumber}, {"5.", "m", ErrNumber},
-		{"1.2.3", "m", ErrNumber}, {"1e", "m", ErrNumber}, {"1e+", "m", ErrNumber}, {"e5", "m", ErrNumber}, {"1e5e5", "m", ErrNumber},
-		{"1e5.5", "m", ErrNumber}, {"1,5", "m", ErrNumber}, {"1 000", "m", ErrNumber}, {"1_000", "m", ErrNumber}, {"--1", "m", ErrNumber},
-		{"0x10", "m", ErrNumber}, {"Inf", "m", ErrNumber}, {"NaN", "m", ErrNumber}, {"1e--5", "m", ErrNumber}, {"1e_5", "m", ErrNumber},
-		{"１", "m", ErrNumber}, {"1\x00", "m", ErrNumber}, {"1e5 ", "m", ErrNumber}, {"", "°C", ErrNumber}, {"x", "°C", ErrNumber},
-		{"1e309", "m", ErrTooLarge}, {"-1e309", "m", ErrTooLarge}, {"1.8e308", "m", ErrTooLarge}, {"1e290", "Qm", ErrTooLarge},
-		{"1e999999999", "m", ErrTooLarge}, {"1e99999999999999999999999", "m", ErrTooLarge}, {"1e309", "°C", ErrTooLarge},
-		{"1e500", "°C", ErrTooLarge}, {"-1e99999999999999999999", "°C", ErrTooLarge},
-		{"1e-330", "m", ErrTooSmall}, {"2.4e-324", "m", ErrTooSmall}, {"-1e-400", "m", ErrTooSmall}, {"1e-300", "qm", ErrTooSmall},
-		{"1e-99999999999999999999999", "m", ErrTooSmall}, {"1e-999999999", "m", ErrTooSmall},
+		{"", "m", ErrNumber},
+		{"-", "m", ErrNumber},
+		{"+1", "m", ErrNumber},
+		{".5", "m", ErrNumber},
+		{"5.", "m", ErrNumber},
+		{"1.2.3", "m", ErrNumber},
+		{"1e", "m", ErrNumber},
+		{"1e+", "m", ErrNumber},
+		{"e5", "m", ErrNumber},
+		{"1e5e5", "m", ErrNumber},
+		{"1e5.5", "m", ErrNumber},
+		{"1,5", "m", ErrNumber},
+		{"1 000", "m", ErrNumber},
+		{"1_000", "m", ErrNumber},
+		{"--1", "m", ErrNumber},
+		{"0x10", "m", ErrNumber},
+		{"Inf", "m", ErrNumber},
+		{"NaN", "m", ErrNumber},
+		{"1e--5", "m", ErrNumber},
+		{"1e_5", "m", ErrNumber},
+		{"１", "m", ErrNumber},
+		{"1\x00", "m", ErrNumber},
+		{"1e5 ", "m", ErrNumber},
+		{"", "°C", ErrNumber},
+		{"x", "°C", ErrNumber},
+		{"1e309", "m", ErrTooLarge},
+		{"-1e309", "m", ErrTooLarge},
+		{"1.8e308", "m", ErrTooLarge},
+		{"1e290", "Qm", ErrTooLarge},
+		{"1e999999999", "m", ErrTooLarge},
+		{"1e99999999999999999999999", "m", ErrTooLarge},
+		{"1e309", "°C", ErrTooLarge},
+		{"1e500", "°C", ErrTooLarge},
+		{"-1e99999999999999999999", "°C", ErrTooLarge},
+		{"1e-330", "m", ErrTooSmall},
+		{"2.4e-324", "m", ErrTooSmall},
+		{"-1e-400", "m", ErrTooSmall},
+		{"1e-300", "qm", ErrTooSmall},
+		{"1e-99999999999999999999999", "m", ErrTooSmall},
+		{"1e-999999999", "m", ErrTooSmall},
 	} {
 		if v, err := parse(t, c.unit).Read(c.text); !errors.Is(err, c.want) || v != 0 {
 			t.Errorf("%q %s: %g, %v, want %v", c.text, c.unit, v, err, c.want)
@@ -143,9 +173,16 @@ func TestReadRefusals(t *testing.T) {
 		text, unit string
 		want       float64
 	}{
-		{"0e99999999999999999999", "m", 0}, {"0.000e-99999999999", "m", 0}, {"1e-99999999999999999999", "°C", 273.15},
-		{"1.7976931348623157e308", "m", math.MaxFloat64}, {"2.5e-324", "m", 0x1p-1074}, {"1e0000000000000000003", "m", 1000},
-		{"1e-340", "Qm", 1e-310}, {"1e330", "qm", 1e300}, {"007", "m", 7}, {"1.79e308", "°C", 1.79e308},
+		{"0e99999999999999999999", "m", 0},
+		{"0.000e-99999999999", "m", 0},
+		{"1e-99999999999999999999", "°C", 273.15},
+		{"1.7976931348623157e308", "m", math.MaxFloat64},
+		{"2.5e-324", "m", 0x1p-1074},
+		{"1e0000000000000000003", "m", 1000},
+		{"1e-340", "Qm", 1e-310},
+		{"1e330", "qm", 1e300},
+		{"007", "m", 7},
+		{"1.79e308", "°C", 1.79e308},
 	} {
 		got, err := parse(t, c.unit).Read(c.text)
 		if err != nil {
@@ -178,11 +215,18 @@ func TestReadLongNumbers(t *testing.T) {
 		want       float64
 		err        error
 	}{
-		{nines, "m", 0, ErrTooLarge}, {"0." + nines, "m", 1, nil}, {"0." + nines, "inch", 0.0254, nil},
-		{"0." + nines, "Torr", 101325. / 760, nil}, {"0." + nines, "°C", 274.15, nil}, {"0." + zeros + "1", "Torr", 0, ErrTooSmall},
-		{"0." + zeros + "1e60001", "Torr", 101325. / 760, nil}, {"1" + zeros + "e-60000", "deg", math.Pi / 180, nil},
-		{"1" + zeros + "e-60000", "°C", 274.15, nil}, {nines + "e-60000", "nm^(1/2)", math.Sqrt(1e-9), nil},
-		{zeros + "1", "psi", 8896443230521. / 1290320000, nil}, {"-0." + zeros + "1", "°C", 273.15, nil},
+		{nines, "m", 0, ErrTooLarge},
+		{"0." + nines, "m", 1, nil},
+		{"0." + nines, "inch", 0.0254, nil},
+		{"0." + nines, "Torr", 101325. / 760, nil},
+		{"0." + nines, "°C", 274.15, nil},
+		{"0." + zeros + "1", "Torr", 0, ErrTooSmall},
+		{"0." + zeros + "1e60001", "Torr", 101325. / 760, nil},
+		{"1" + zeros + "e-60000", "deg", math.Pi / 180, nil},
+		{"1" + zeros + "e-60000", "°C", 274.15, nil},
+		{nines + "e-60000", "nm^(1/2)", math.Sqrt(1e-9), nil},
+		{zeros + "1", "psi", 8896443230521. / 1290320000, nil},
+		{"-0." + zeros + "1", "°C", 273.15, nil},
 	} {
 		got, err := parse(t, c.unit).Read(c.text)
 		if !errors.Is(err, c.err) {

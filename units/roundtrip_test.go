@@ -93,9 +93,25 @@ func TestDigitsReadBackExactly(t *testing.T) {
 
 func TestDigitsAreShort(t *testing.T) {
 	for _, c := range []struct{ number, unit string }{
-		{"13.5", "nm"}, {"30", "mJ/cm^2"}, {"22", "°C"}, {"0", "°C"}, {"-5", "°C"}, {"26.85", "°C"}, {"-273.15", "°C"},
-		{"6", "deg"}, {"0.1", "Torr"}, {"14.7", "psi"}, {"91.84", "eV"}, {"2", "year"}, {"0", "m"}, {"64", "1"},
-		{"0.123456789012345", "L/min"}, {"5e-324", "m"}, {"1e-320", "m"}, {"1e+22", "m"}, {"4.2", "nm^(1/2)"},
+		{"13.5", "nm"},
+		{"30", "mJ/cm^2"},
+		{"22", "°C"},
+		{"0", "°C"},
+		{"-5", "°C"},
+		{"26.85", "°C"},
+		{"-273.15", "°C"},
+		{"6", "deg"},
+		{"0.1", "Torr"},
+		{"14.7", "psi"},
+		{"91.84", "eV"},
+		{"2", "year"},
+		{"0", "m"},
+		{"64", "1"},
+		{"0.123456789012345", "L/min"},
+		{"5e-324", "m"},
+		{"1e-320", "m"},
+		{"1e+22", "m"},
+		{"4.2", "nm^(1/2)"},
 	} {
 		u := parse(t, c.unit)
 		si, err := u.Read(c.number)
@@ -166,8 +182,12 @@ func TestTextBeyondFloat64(t *testing.T) {
 		unit string
 		text string
 	}{
-		{1e300, "qm", "1.0000e330 qm"}, {-1e300, "qm", "-1.0000e330 qm"}, {1e-300, "Qm", "1.0000e-330 Qm"},
-		{0, "Qm", "0 Qm"}, {math.Inf(1), "m", "+Inf m"}, {math.NaN(), "m", "NaN m"},
+		{1e300, "qm", "1.0000e330 qm"},
+		{-1e300, "qm", "-1.0000e330 qm"},
+		{1e-300, "Qm", "1.0000e-330 Qm"},
+		{0, "Qm", "0 Qm"},
+		{math.Inf(1), "m", "+Inf m"},
+		{math.NaN(), "m", "NaN m"},
 	} {
 		if got := Standard().TextIn(c.si, parse(t, c.unit), 5); got != c.text {
 			t.Errorf("%g in %s is %s, want %s", c.si, c.unit, got, c.text)
@@ -178,8 +198,15 @@ func TestTextBeyondFloat64(t *testing.T) {
 // A root of a scale comes back exactly when it is raised again.
 func TestRootsAreExact(t *testing.T) {
 	for _, c := range []struct{ text, same string }{
-		{"(nm^(1/2))^2", "nm"}, {"nm^(1/2)*nm^(1/2)", "nm"}, {"min^(1/3)*min^(2/3)", "min"}, {"(deg^(1/6))^6", "deg"},
-		{"h^(1/2)*h^(1/3)*h^(1/6)", "h"}, {"Torr^(1/2)/Torr^(1/3)", "Torr^(1/6)"}, {"(cm^2)^(1/2)", "cm"}, {"(h*s)^(1/2)", "min"}, {"(h*s)^(1/2)", "min"},
+		{"(nm^(1/2))^2", "nm"},
+		{"nm^(1/2)*nm^(1/2)", "nm"},
+		{"min^(1/3)*min^(2/3)", "min"},
+		{"(deg^(1/6))^6", "deg"},
+		{"h^(1/2)*h^(1/3)*h^(1/6)", "h"},
+		{"Torr^(1/2)/Torr^(1/3)", "Torr^(1/6)"},
+		{"(cm^2)^(1/2)", "cm"},
+		{"(h*s)^(1/2)", "min"},
+		{"(h*s)^(1/2)", "min"},
 		{"cm^(-1/2)*cm^(-1/2)", "cm^-1"},
 	} {
 		sameUnit(t, c.text, parse(t, c.text), parse(t, c.same))

@@ -84,8 +84,10 @@ var refused = map[string][2]string{
 	"dBm":  {"dBm is a logarithm", "write the power in W"},
 	"dB":   {"dB is a logarithm", "write the ratio as a number"},
 	"cc":   {"cc is no symbol", "write cm^3"},
-	"micron": {"micron is no symbol here",
-		"write µm or um"},
+	"micron": {
+		"micron is no symbol here",
+		"write µm or um",
+	},
 	"‰": {"‰ is no unit here", "write the number itself, as in 5e-3"},
 }
 

@@ -133,7 +133,10 @@ func (e *engine) Complete(line string, cursor int) (int, []string) {
 
 func (e *engine) Hint(line string, cursor int) string { return e.session.Hint(line, cursor) }
 
-func (e *engine) Abandon() { e.session.Cancel() }
+func (e *engine) Abandon() {
+	e.session.Cancel()
+	e.status = statusRefused // of a pipe that ends inside a block
+}
 
 var kinds = map[repl.Tone]terminal.Kind{
 	repl.Plain: terminal.Plain, repl.Marks: terminal.Mark, repl.Refused: terminal.Refusal,

@@ -139,7 +139,7 @@ func TestDiskFull(t *testing.T) {
 		piped     string
 		args      []string
 	}{
-		"save":            {"day.budget", old, long + "1 nm\nsave \"day.budget\"\n", nil},
+		"save":            {"day.budget", old, long + "1 nm\nsave \"day.budget\"\nsave \"day.budget\"\n", nil},
 		"save a new file": {"day.budget", old, long + "1 nm\nsave \"new.budget\"\n", nil},
 		"a table":         {"x.csv", "x\n1\n", "sweep x = 1 .. 2 999 points : x to \"x.csv\"\n", nil},
 		"update":          {"day.budget", old + long, "", []string{"replay", "--update", "day.budget"}},

@@ -56,7 +56,8 @@ func sum(text string) Answer {
 		n, err := strconv.Atoi(strings.TrimSpace(part))
 		if err != nil {
 			return Answer{Lines: []Line{
-				{Text: text}, {Text: strings.Repeat("~", len([]rune(text))), Kind: Mark},
+				{Text: text},
+				{Text: strings.Repeat("~", len([]rune(text))), Kind: Mark},
 				{Text: strings.TrimSpace(part) + " is no number", Kind: Refusal},
 			}}
 		}

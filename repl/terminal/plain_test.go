@@ -29,13 +29,19 @@ func TestPlain(t *testing.T) {
 		{"a block", "open\n  a\n  b\nend\n1\n", "| 2 lines\n| 1\n"},
 		{"a block that does not end", "open\na\n", "| the input ended inside a block, which was dropped\n"},
 		{"quit", "1\nquit\n2\n", "| 1\n"},
-		{"a fault", "fail\n1\n",
-			"| a fault of this program, not of the statement: out of cheese; please report it with the line\n| 1\n"},
-		{"keys are no keys here", "1\x01+2\x7f\n",
-			"| 1\\x01+2\\x7f\n| ~~~~~\n| 1\\x01 is no number\n"},
+		{
+			"a fault", "fail\n1\n",
+			"| a fault of this program, not of the statement: out of cheese; please report it with the line\n| 1\n",
+		},
+		{
+			"keys are no keys here", "1\x01+2\x7f\n",
+			"| 1\\x01+2\\x7f\n| ~~~~~\n| 1\\x01 is no number\n",
+		},
 		{"a sign of a recalled block is text here", "1 ↵ 2\n", "| 1 ↵ 2\n| ~~~~~\n| 1 ↵ 2 is no number\n"},
-		{"a line that is too long", strings.Repeat("1+", maxLine) + "1\n2\n",
-			"| the line is too long and was left out: make several lines of it\n| 2\n"},
+		{
+			"a line that is too long", strings.Repeat("1+", maxLine) + "1\n2\n",
+			"| the line is too long and was left out: make several lines of it\n| 2\n",
+		},
 		{"a long line", strings.Repeat("1+", 50_000) + "1\n", "| 50001\n"},
 	} {
 		if got := said(t, c.input); got != c.want {

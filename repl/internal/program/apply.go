@@ -106,8 +106,10 @@ func (c *Checker) own(x *syntax.Call, f *OwnFunction) (*Node, error) {
 	}
 	c.use(f.Name)
 	here := c.place(x.Where)
-	inner := &Checker{Scope: c.Scope, Source: f.Source, Owner: c.Owner, anchor: &here, size: c.size,
-		locals: map[string]*Node{}, inside: append(slices.Clone(c.inside), f.Name)}
+	inner := &Checker{
+		Scope: c.Scope, Source: f.Source, Owner: c.Owner, anchor: &here, size: c.size,
+		locals: map[string]*Node{}, inside: append(slices.Clone(c.inside), f.Name),
+	}
 	if len(inner.inside) > 40 {
 		return nil, syntax.Fail(x.Where, "session functions call one another deeper than 40", "write the steps as names")
 	}

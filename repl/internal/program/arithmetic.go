@@ -104,6 +104,9 @@ func (c *Checker) wayFrom(x syntax.Expr, have, want units.Dimension, join string
 	if strings.ContainsAny(name[:1], "aeiou") {
 		article = "an"
 	}
+	if ratio, err := want.Div(have); err == nil && ratio.HasCounted() && !strings.HasPrefix(join, "1/") {
+		return c.word(x, have) + " times a value in " + join + " is " + article + " " + name
+	}
 	step := " * " + spaced(join)
 	if below, ok := strings.CutPrefix(join, "1/"); ok {
 		step = " / " + spaced(below)
@@ -216,8 +219,10 @@ func (c *Checker) rationalPower(x *syntax.Binary, a *Node, t Type, num, den int)
 
 // powerRefused refuses a power or root whose exponents are none.
 func (c *Checker) powerRefused(at syntax.Span, t Type, err error) *syntax.Error {
-	e := &syntax.Error{Marks: []syntax.Span{at}, Msg: c.describe(t) + " has no such power: " + err.Error(), Cause: err,
-		Hint: "exponents of units and planes are multiples of 1/6 from -21 to 21"}
+	e := &syntax.Error{
+		Marks: []syntax.Span{at}, Msg: c.describe(t) + " has no such power: " + err.Error(), Cause: err,
+		Hint: "exponents of units and planes are multiples of 1/6 from -21 to 21",
+	}
 	if t.Dim.HasCounted() || t.Plane != "" {
 		e.Hint = "number_of(x) drops counted things and planes on purpose"
 	}

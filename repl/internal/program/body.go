@@ -40,8 +40,10 @@ func (c *Checker) Quantity(x syntax.Expr, want units.Dimension, what string) (*N
 		return nil, e
 	}
 	if n.Type.Kind != Number || n.Type.Dim != want {
-		return nil, &syntax.Error{Marks: []syntax.Span{x.Span()}, Msg: what + " is " + c.quantity(want) + ", not " + c.describe(n.Type),
-			Hint: "give it in " + c.Scope.Units().UnitText(want), Cause: Differ("take", n.Type, Type{Dim: want})}
+		return nil, &syntax.Error{
+			Marks: []syntax.Span{x.Span()}, Msg: what + " is " + c.quantity(want) + ", not " + c.describe(n.Type),
+			Hint: "give it in " + c.Scope.Units().UnitText(want), Cause: Differ("take", n.Type, Type{Dim: want}),
+		}
 	}
 	return n, nil
 }

@@ -83,8 +83,10 @@ func (c *Checker) grown(at syntax.Span) error {
 	if *c.size++; *c.size <= MaxNodes {
 		return nil
 	}
-	return &syntax.Error{Marks: []syntax.Span{at}, Cause: ErrSize,
-		Msg: fmt.Sprintf("this formula has more than %d parts", MaxNodes), Hint: "give parts of it names of their own"}
+	return &syntax.Error{
+		Marks: []syntax.Span{at}, Cause: ErrSize,
+		Msg: fmt.Sprintf("this formula has more than %d parts", MaxNodes), Hint: "give parts of it names of their own",
+	}
 }
 
 // Check gives an expression its meaning. The error is a *syntax.Error.

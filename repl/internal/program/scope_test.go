@@ -69,8 +69,10 @@ func (d *desk) Near(word string) []string {
 
 // newDesk has the functions that the tests use; each counts its runs.
 func newDesk() *desk {
-	d := &desk{sys: units.Standard(), rows: map[string]*Function{}, nodes: map[string]*Node{},
-		owns: map[string]*OwnFunction{}, texts: map[string]string{}, calls: map[string]int{}}
+	d := &desk{
+		sys: units.Standard(), rows: map[string]*Function{}, nodes: map[string]*Node{},
+		owns: map[string]*OwnFunction{}, texts: map[string]string{}, calls: map[string]int{},
+	}
 	same := func(t []Type) (Type, error) { return t[0], nil }
 	pure := func(t []Type) (Type, error) {
 		if !t[0].Pure() {
@@ -78,13 +80,20 @@ func newDesk() *desk {
 		}
 		return Type{}, nil
 	}
-	d.add(Function{Name: "sqrt", Params: []Param{{Name: "x"}}, Rule: func(t []Type) (Type, error) { return t[0].Root(2) },
-		Call: func(x []float64) (float64, []string, error) { return math.Sqrt(x[0]), nil, nil }})
-	d.add(Function{Name: "ln", Params: []Param{{Name: "x"}}, Rule: pure,
-		Call: func(x []float64) (float64, []string, error) { return math.Log(x[0]), nil, nil }})
-	d.add(Function{Name: "max", Params: []Param{{Name: "values", Kind: List}}, Rule: same,
-		Call: func(x []float64) (float64, []string, error) { return slices.Max(x), nil, nil }})
-	d.add(Function{Name: "sum", Params: []Param{{Name: "values", Kind: List}},
+	d.add(Function{
+		Name: "sqrt", Params: []Param{{Name: "x"}}, Rule: func(t []Type) (Type, error) { return t[0].Root(2) },
+		Call: func(x []float64) (float64, []string, error) { return math.Sqrt(x[0]), nil, nil },
+	})
+	d.add(Function{
+		Name: "ln", Params: []Param{{Name: "x"}}, Rule: pure,
+		Call: func(x []float64) (float64, []string, error) { return math.Log(x[0]), nil, nil },
+	})
+	d.add(Function{
+		Name: "max", Params: []Param{{Name: "values", Kind: List}}, Rule: same,
+		Call: func(x []float64) (float64, []string, error) { return slices.Max(x), nil, nil },
+	})
+	d.add(Function{
+		Name: "sum", Params: []Param{{Name: "values", Kind: List}},
 		Rule: func(t []Type) (Type, error) {
 			if t[0].Kind == Point {
 				return t[0], errors.New("temperature points do not add up")
@@ -97,19 +106,26 @@ func newDesk() *desk {
 				s += v
 			}
 			return s, nil, nil
-		}})
-	d.add(Function{Name: "quantile", Params: []Param{{Name: "values", Kind: List}, {Name: "p"}}, Rule: same,
+		},
+	})
+	d.add(Function{
+		Name: "quantile", Params: []Param{{Name: "values", Kind: List}, {Name: "p"}}, Rule: same,
 		Call: func(x []float64) (float64, []string, error) {
 			v := slices.Sorted(slices.Values(x[:len(x)-1]))
 			return v[int(x[len(x)-1]*float64(len(v)-1))], nil, nil
-		}})
-	d.add(Function{Name: "number_of", Params: []Param{{Name: "x"}},
+		},
+	})
+	d.add(Function{
+		Name: "number_of", Params: []Param{{Name: "x"}},
 		Rule: func(t []Type) (Type, error) { return Type{Dim: t[0].Dim.WithoutCounted()}, nil },
-		Call: func(x []float64) (float64, []string, error) { return x[0], nil, nil }})
-	d.add(Function{Name: "count", Summary: "photons of 13.5 nm light", Params: []Param{
-		{Name: "dose", Dim: units.DimensionOf[units.Fluence](), Plane: "WAFER"},
-		{Name: "area", Dim: units.DimensionOf[units.Area](), Doc: "the area that is lit"},
-		{Name: "wavelength", Dim: units.DimensionOf[units.Length](), Default: "13.5 nm"}},
+		Call: func(x []float64) (float64, []string, error) { return x[0], nil, nil },
+	})
+	d.add(Function{
+		Name: "count", Summary: "photons of 13.5 nm light", Params: []Param{
+			{Name: "dose", Dim: units.DimensionOf[units.Fluence](), Plane: "WAFER"},
+			{Name: "area", Dim: units.DimensionOf[units.Area](), Doc: "the area that is lit"},
+			{Name: "wavelength", Dim: units.DimensionOf[units.Length](), Default: "13.5 nm"},
+		},
 		Result: Result{Follows: 1},
 		Call: func(x []float64) (float64, []string, error) {
 			if !(x[2] > 0) {
@@ -117,29 +133,41 @@ func newDesk() *desk {
 			}
 			const hc = 6.62607015e-34 * 299792458 // exact in the SI
 			return x[0] * x[1] * x[2] / hc, nil, nil
-		}})
-	d.add(Function{Name: "drift", Params: []Param{
-		{Name: "temperature", Kind: Point, Dim: units.DimensionOf[units.Temperature]()},
-		{Name: "change", Dim: units.DimensionOf[units.Temperature]()}},
+		},
+	})
+	d.add(Function{
+		Name: "drift", Params: []Param{
+			{Name: "temperature", Kind: Point, Dim: units.DimensionOf[units.Temperature]()},
+			{Name: "change", Dim: units.DimensionOf[units.Temperature]()},
+		},
 		Result: Result{Kind: Point, Dim: units.DimensionOf[units.Temperature]()},
-		Call:   func(x []float64) (float64, []string, error) { return x[0] + x[1], nil, nil }})
-	d.add(Function{Name: "slope", Params: []Param{{Name: "x"}, {Name: "tone", Words: []string{"positive", "negative"}, Default: "positive"}},
-		Call: func(x []float64) (float64, []string, error) { return x[0] * (1 - 2*x[1]), nil, nil }})
-	d.add(Function{Name: "capped", Params: []Param{{Name: "x"}, {Name: "limit", Default: "none"}},
+		Call:   func(x []float64) (float64, []string, error) { return x[0] + x[1], nil, nil },
+	})
+	d.add(Function{
+		Name: "slope", Params: []Param{{Name: "x"}, {Name: "tone", Words: []string{"positive", "negative"}, Default: "positive"}},
+		Call: func(x []float64) (float64, []string, error) { return x[0] * (1 - 2*x[1]), nil, nil },
+	})
+	d.add(Function{
+		Name: "capped", Params: []Param{{Name: "x"}, {Name: "limit", Default: "none"}},
 		Call: func(x []float64) (float64, []string, error) {
 			if x[0] > x[1] {
 				return x[1], []string{"the limit holds"}, nil
 			}
 			return x[0], nil, nil
-		}})
-	d.add(Function{Name: "transmission", Params: []Param{{Name: "chain", Kind: ChainKind}, {Name: "from", IsPlane: true}, {Name: "to", IsPlane: true}},
+		},
+	})
+	d.add(Function{
+		Name: "transmission", Params: []Param{{Name: "chain", Kind: ChainKind}, {Name: "from", IsPlane: true}, {Name: "to", IsPlane: true}},
 		Build: func(c *Checker, k *Call) (*Node, error) {
 			return c.Transmission(k.Args[0].Chain(), Plane(k.Words[1]), Plane(k.Words[2]), k.Tree.Where)
-		}})
-	d.add(Function{Name: "carry", Params: []Param{{Name: "x", Any: true}, {Name: "chain", Kind: ChainKind}, {Name: "plane", IsPlane: true}},
+		},
+	})
+	d.add(Function{
+		Name: "carry", Params: []Param{{Name: "x", Any: true}, {Name: "chain", Kind: ChainKind}, {Name: "plane", IsPlane: true}},
 		Build: func(c *Checker, k *Call) (*Node, error) {
 			return c.Carry(k.Args[0], k.Exprs[0], k.Args[1].Chain(), Plane(k.Words[2]), k.Tree.Where)
-		}})
+		},
+	})
 	return d
 }
 

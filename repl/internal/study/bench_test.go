@@ -10,8 +10,14 @@ import (
 // The formula p·t1·t2·r^10·a/(d·s+b) of eight variables, as blocks and by hand.
 
 var eight = []Input{
-	{Value: 250, U: 5}, {Value: 0.9, U: 0.01}, {Value: 0.8, U: 0.01}, {Value: 0.7, U: 0.005},
-	{Value: 0.1, U: 0.001}, {Value: 30, U: 0.6}, {Value: 0.5, U: 0.01}, {Value: 10, U: 0.2},
+	{Value: 250, U: 5},
+	{Value: 0.9, U: 0.01},
+	{Value: 0.8, U: 0.01},
+	{Value: 0.7, U: 0.005},
+	{Value: 0.1, U: 0.001},
+	{Value: 30, U: 0.6},
+	{Value: 0.5, U: 0.01},
+	{Value: 10, U: 0.2},
 }
 
 func formula(p, t1, t2, r, a, d, s, b float64) float64 {

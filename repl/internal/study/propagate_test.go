@@ -67,8 +67,11 @@ func TestComparisonLoss(t *testing.T) {
 		id    string
 		x1, r float64
 	}{
-		{"S1-9.4-r0-x0.0", 0, 0}, {"S1-9.4-r0-x0.01", 0.01, 0}, {"S1-9.4-r0-x0.05", 0.05, 0},
-		{"S1-9.4-r0.9-x0.0", 0, 0.9}, {"S1-9.4-r0.9-x0.05", 0.05, 0.9},
+		{"S1-9.4-r0-x0.0", 0, 0},
+		{"S1-9.4-r0-x0.01", 0.01, 0},
+		{"S1-9.4-r0-x0.05", 0.05, 0},
+		{"S1-9.4-r0.9-x0.0", 0, 0.9},
+		{"S1-9.4-r0.9-x0.05", 0.05, 0.9},
 	} {
 		s := sources(t, []Input{{Value: c.x1, U: 0.005}, {U: 0.005}}, Correlation{0, 1, c.r})
 		d := propagate(t, program(f), s, Propagation{Trials: 2_000_000, Seed: 20080901})
@@ -85,8 +88,13 @@ func TestComparisonLoss(t *testing.T) {
 // TestReproducible: the same bits on one core and on two, whatever is watched.
 func TestReproducible(t *testing.T) {
 	s := sources(t, []Input{
-		{Value: 1, U: 0.1}, {Shape: Rectangular, Low: 2, High: 3}, {Shape: Triangular, Low: 0, High: 1},
-		{Value: 5, U: 0.1, DoF: 4}, {Value: 6, U: 0.2}, {Value: 7, U: 0.3}, Exact(2),
+		{Value: 1, U: 0.1},
+		{Shape: Rectangular, Low: 2, High: 3},
+		{Shape: Triangular, Low: 0, High: 1},
+		{Value: 5, U: 0.1, DoF: 4},
+		{Value: 6, U: 0.2},
+		{Value: 7, U: 0.3},
+		Exact(2),
 	}, Correlation{4, 5, -0.7})
 	f := program(eval(func(x []float64) float64 { return x[0]*x[1] + x[2]*x[3] - x[4]*x[5]*x[6] }))
 	asked := Propagation{Trials: 100_001, Seed: 42}
@@ -200,8 +208,12 @@ func TestDrawRefused(t *testing.T) {
 		a     Propagation
 		cause error
 	}{
-		{Propagation{Trials: MaxTrials + 1}, ErrSize}, {Propagation{Trials: 1000}, ErrRange}, {Propagation{Trials: -1}, ErrRange},
-		{Propagation{Coverage: 1}, ErrRange}, {Propagation{Coverage: 0.99999}, ErrRange}, {Propagation{Bins: -1}, ErrSize},
+		{Propagation{Trials: MaxTrials + 1}, ErrSize},
+		{Propagation{Trials: 1000}, ErrRange},
+		{Propagation{Trials: -1}, ErrRange},
+		{Propagation{Coverage: 1}, ErrRange},
+		{Propagation{Coverage: 0.99999}, ErrRange},
+		{Propagation{Bins: -1}, ErrSize},
 	} {
 		if _, err := Propagate(context.Background(), program(sum), s, c.a); !errors.Is(err, c.cause) {
 			t.Errorf("%+v: %v", c.a, err)

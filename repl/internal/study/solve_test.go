@@ -150,9 +150,12 @@ func TestRangeRefused(t *testing.T) {
 		r     Range
 		cause error
 	}{
-		{Range{Slots: []float64{0}, From: 1, To: 1}, ErrRange}, {Range{Slots: []float64{0}, From: 2, To: 1}, ErrRange},
-		{Range{Slots: []float64{0}, To: math.Inf(1)}, ErrRange}, {Range{Slots: []float64{0}, Slot: 1, To: 1}, ErrRange},
-		{Range{Slots: []float64{0}, To: 1, Points: 2}, ErrSize}, {Range{Slots: []float64{0}, To: 1, Points: MaxSurvey + 1}, ErrSize},
+		{Range{Slots: []float64{0}, From: 1, To: 1}, ErrRange},
+		{Range{Slots: []float64{0}, From: 2, To: 1}, ErrRange},
+		{Range{Slots: []float64{0}, To: math.Inf(1)}, ErrRange},
+		{Range{Slots: []float64{0}, Slot: 1, To: 1}, ErrRange},
+		{Range{Slots: []float64{0}, To: 1, Points: 2}, ErrSize},
+		{Range{Slots: []float64{0}, To: 1, Points: MaxSurvey + 1}, ErrSize},
 		{Range{Slots: []float64{0}, From: -1e308, To: 1e308}, ErrRange},
 	} {
 		if _, err := Maximise(context.Background(), sum, c.r); !errors.Is(err, c.cause) {
@@ -171,18 +174,24 @@ func TestOptima(t *testing.T) {
 		want     []Optimum
 	}{
 		{"parabola", func(x float64) float64 { return 3 - (x-2)*(x-2) }, 0, 5, false, []Optimum{{X: 2, To: 2, Y: 3}}},
-		{"two humps", func(x float64) float64 { return hump(x, 3, 0.5, 1) + hump(x, 7, 0.5, 2) }, 0, 10, false,
-			[]Optimum{{X: 7, To: 7, Y: 2}, {X: 3, To: 3, Y: 1}}},
+		{
+			"two humps", func(x float64) float64 { return hump(x, 3, 0.5, 1) + hump(x, 7, 0.5, 2) }, 0, 10, false,
+			[]Optimum{{X: 7, To: 7, Y: 2}, {X: 3, To: 3, Y: 1}},
+		},
 		{"symmetric about the middle of a step", func(x float64) float64 { return -x * x }, -1, 1, false, []Optimum{{}}},
 		{"rising", func(x float64) float64 { return x }, 1, 4, false, []Optimum{{X: 4, To: 4, Y: 4, Boundary: AtTo}}},
 		{"rising, least", func(x float64) float64 { return x }, 1, 4, true, []Optimum{{X: 1, To: 1, Y: 1, Boundary: AtFrom}}},
-		{"both ends", func(x float64) float64 { return x * x }, -1, 2, false,
-			[]Optimum{{X: 2, To: 2, Y: 4, Boundary: AtTo}, {X: -1, To: -1, Y: 1, Boundary: AtFrom}}},
+		{
+			"both ends", func(x float64) float64 { return x * x }, -1, 2, false,
+			[]Optimum{{X: 2, To: 2, Y: 4, Boundary: AtTo}, {X: -1, To: -1, Y: 1, Boundary: AtFrom}},
+		},
 		{"level", fixed(7), 1, 4, false, []Optimum{{X: 1, To: 4, Y: 7, Boundary: AtFrom}}},
 		{"edge of values", func(x float64) float64 { return -math.Sqrt(x - 1) }, 0, 4, false, []Optimum{{X: 1, To: 1, Boundary: AtNoValues}}},
 		{"cusp, least", func(x float64) float64 { return math.Abs(x - 0.3) }, -1, 1, true, []Optimum{{X: 0.3, To: 0.3}}},
-		{"swing at depth of focus", func(x float64) float64 { return 1 / (1 + math.Pow((x-13.5e-9)/0.3e-9, 2)) }, 12e-9, 15e-9, false,
-			[]Optimum{{X: 13.5e-9, To: 13.5e-9, Y: 1}}},
+		{
+			"swing at depth of focus", func(x float64) float64 { return 1 / (1 + math.Pow((x-13.5e-9)/0.3e-9, 2)) }, 12e-9, 15e-9, false,
+			[]Optimum{{X: 13.5e-9, To: 13.5e-9, Y: 1}},
+		},
 	} {
 		f := eval(func(x []float64) float64 { return c.f(x[0]) })
 		find := Maximise
