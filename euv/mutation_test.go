@@ -195,3 +195,74 @@ func TestStackSaysWhatItIs(t *testing.T) {
 		}
 	}
 }
+
+// Of two fringes of like width the higher one is the peak, also where a place
+// of the first search lies on top of the lower and none on top of the higher.
+func TestPeakBetweenPlaces(t *testing.T) {
+	const from, to, fringe = 13e-9, 14e-9, 0.04e-9 // 400 places, 2.5 pm apart
+	const step = (to - from) / 400
+	lower, higher := from+100*step, from+300.5*step
+	hump := func(l, at, height float64) float64 {
+		if x := (l - at) / fringe; math.Abs(x) < 0.5 {
+			return height * math.Pow(math.Cos(math.Pi*x), 2)
+		}
+		return 0
+	}
+	p := sure(FindPeak(func(dst, wavelengths []float64) error {
+		for i, l := range wavelengths {
+			dst[i] = hump(l, lower, 1) + hump(l, higher, 1.005)
+		}
+		return nil
+	}, from, to, fringe))
+	near.Rel(t, "place", float64(p.Wavelength), higher, 1e-8)
+	near.Rel(t, "height", p.Value, 1.005, 1e-10)
+	near.Rel(t, "width at half height", float64(sure(p.Bandwidth())), fringe/2, 1e-6)
+}
+
+// The fringes of a thick clear film are λ²/2nd apart, and as wide at half height
+// as half of that, where its faces reflect little: R is 4r² sin²(2πnd/λ).
+func TestFringesOfAThickFilm(t *testing.T) {
+	const n, d = 0.98, 20e-6
+	s := Stack{Repeats: []Repeat{Once(Layer{Medium: Index{Delta: 1 - n}, Thickness: d})}}
+	p := sure(s.Peak(0, Unpolarised, 13.5*nm))
+	r := (1 - n) / (1 + n)
+	near.Rel(t, "height", p.Value, 4*r*r, 1e-3)
+	l := float64(p.Wavelength)
+	near.Rel(t, "width at half height", float64(sure(p.Bandwidth())), l*l/(4*n*d), 1e-2)
+}
+
+// Where float64 ends the fast form hands over before it fails.
+func TestExponentialsAtTheEnds(t *testing.T) {
+	for _, x := range []float64{-700.5, -705, -708, -709.5, -715, -719, 700.5, 705, 708, 709} {
+		z := []complex128{complex(x, 1)}
+		exponentials(z)
+		want := cmplx.Exp(complex(x, 1))
+		least := 0x1p-1074 // one unit of a number below the normal ones
+		near.Abs(t, "real part", real(z[0]), real(want), 1e-15*cmplx.Abs(want)+least)
+		near.Abs(t, "imaginary part", imag(z[0]), imag(want), 1e-15*cmplx.Abs(want)+least)
+	}
+}
+
+// The warning of lost digits begins at 1e-300: e^−mean of no event passes it
+// between a mean of 690 and one of 691.
+func TestWarningOfLostDigits(t *testing.T) {
+	for mean, warnings := range map[units.Count]int{100: 0, 690: 0, 691: 1, 700: 1, 740: 1} {
+		p := sure(PoissonAtMost(0, mean))
+		near.Rel(t, "e^−mean", float64(p.Value), math.Exp(-float64(mean)), 1e-12)
+		if len(p.Warnings) != warnings {
+			t.Errorf("mean %g: %q", float64(mean), p.Warnings)
+		}
+	}
+}
+
+// A count beyond 2⁵³ is none that float64 counts one by one.
+func TestThresholdsOfCountableEvents(t *testing.T) {
+	for threshold, ok := range map[units.Ratio]bool{0.5: true, 1: true, 1.000001: false, 1.9: false, 3: false} {
+		if _, err := MissingProbability(countable, threshold); (err == nil) != ok || !ok && !refusedFor(err, "threshold") {
+			t.Errorf("missing, %g of 2⁵³: %v", threshold, err)
+		}
+		if _, err := MergingProbability(countable, threshold); (err == nil) != ok {
+			t.Errorf("merging, %g of 2⁵³: %v", threshold, err)
+		}
+	}
+}

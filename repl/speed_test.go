@@ -13,8 +13,6 @@ import (
 
 // The estimate of throughput that the speed is measured with: eight uncertain
 // inputs, a tenth power and a quotient of sums.
-var throughputNames = []string{"p", "t1", "t2", "r", "a", "d", "s", "b"}
-
 const throughputFormula = "p*t1*t2*r^10*a/(d*s+b)"
 
 func throughputSession(t testing.TB, config Config) *Session {

@@ -2,7 +2,6 @@ package units
 
 import (
 	"testing"
-	"time"
 )
 
 func BenchmarkParse(b *testing.B) {
@@ -101,34 +100,11 @@ func BenchmarkFloatMul(b *testing.B) {
 	b.ReportMetric(float64(b.Elapsed().Nanoseconds())/float64(b.N)/chain, "ns/mul")
 }
 
-// A product of quantities costs no allocation and a few nanoseconds; both are
-// measured beside a plain product, so that a slow machine is no failure.
-func TestQuantityMulIsCheap(t *testing.T) {
+// A product of quantities costs no allocation; what it costs in time is for the
+// benchmarks to say.
+func TestQuantityMulAllocatesNothing(t *testing.T) {
 	pair := [2]Quantity{New(1.5, dimFluence), New(1/1.5, must(t)(Dimension{}.Div(dimFluence)))}
 	if n := testing.AllocsPerRun(10, func() { mulQuantities(New(300, dimArea), pair) }); n != 0 {
 		t.Errorf("%v allocations", n)
-	}
-	plain, dynamic := time.Hour, time.Hour
-	sum := 0.0
-	for range 50 { // the best of many, since others use the machine too
-		start := time.Now()
-		for range 100 {
-			sum += mulFloats(300, [2]float64{1.5, 1 / 1.5})
-		}
-		plain = min(plain, time.Since(start))
-		start = time.Now()
-		for range 100 {
-			q, err := mulQuantities(New(300, dimArea), pair)
-			if err != nil {
-				t.Fatal(err)
-			}
-			sum += q.si
-		}
-		dynamic = min(dynamic, time.Since(start))
-	}
-	perMul := func(d time.Duration) float64 { return float64(d.Nanoseconds()) / 100 / chain }
-	t.Logf("%.2f ns a product of quantities, %.2f ns a product of float64 (sum %g)", perMul(dynamic), perMul(plain), sum)
-	if perMul(dynamic) > max(4, 6*perMul(plain)) {
-		t.Errorf("%.2f ns a product of quantities, %.2f ns a product of float64, want at most 4 ns", perMul(dynamic), perMul(plain))
 	}
 }

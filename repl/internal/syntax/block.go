@@ -73,10 +73,16 @@ func ParseHeading(line string) (*Block, *Error) {
 // ParseBlockLine reads one line of a block; it returns nil for a blank line or
 // a note.
 func ParseBlockLine(line string) (*BlockLine, *Error) {
+	return parseLine(line, 0)
+}
+
+// parseLine reads the line of a block that stands in src from a place on.
+func parseLine(src string, start int) (*BlockLine, *Error) {
+	line := src[start:]
 	if len(line) > MaxStatement {
-		return nil, Fail(Span{}, fmt.Sprintf("this line has %d bytes; a line may have %d", len(line), MaxStatement), "give parts of it names of their own")
+		return nil, Fail(Span{start, start}, fmt.Sprintf("this line has %d bytes; a line may have %d", len(line), MaxStatement), "give parts of it names of their own")
 	}
-	p := newParser(line)
+	p := parserAt(src, start)
 	if p.err == nil && p.tok.Kind == End {
 		return nil, nil
 	}
@@ -156,7 +162,10 @@ func parseBlock(src string) (*Statement, *Error) {
 			}
 			return s, nil
 		}
-		line, err := parseAt(src[:offset], text)
+		if offset+len(text) > MaxStatement {
+			return nil, Fail(Span{offset, offset}, fmt.Sprintf("this block has more than %d bytes", MaxStatement), "make two of it")
+		}
+		line, err := parseLine(src[:offset+len(text)], offset)
 		if err != nil {
 			return nil, err
 		}
@@ -177,17 +186,4 @@ func nothingBehind(lines []string, offset int) *Error {
 		offset += len(text) + 1
 	}
 	return nil
-}
-
-// parseAt reads a line as if it stood behind the text before it. Blanks keep
-// the place, so that every span counts from the start of the block.
-func parseAt(before, text string) (*BlockLine, *Error) {
-	if len(before)+len(text) > MaxStatement {
-		return nil, Fail(Span{len(before), len(before)}, fmt.Sprintf("this block has more than %d bytes", MaxStatement), "make two of it")
-	}
-	line, err := ParseBlockLine(strings.Repeat(" ", len(before)) + text)
-	if line != nil {
-		line.Text = trimBlanks(text)
-	}
-	return line, err
 }

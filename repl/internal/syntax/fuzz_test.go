@@ -21,7 +21,7 @@ func FuzzParse(f *testing.F) {
 	f.Fuzz(func(t *testing.T, text string) {
 		start := time.Now()
 		st, err := Parse(text)
-		if took := time.Since(start); took > 2*time.Second {
+		if took := time.Since(start); took > 20*time.Second {
 			t.Fatalf("%d bytes took %v", len(text), took)
 		}
 		if (st == nil) != (err != nil) {

@@ -22,8 +22,16 @@ type parser struct {
 	err   *Error
 }
 
-func newParser(src string) *parser {
-	p := &parser{scan: scanner{src: src}, err: unreadable(src)}
+func newParser(src string) *parser { return parserAt(src, 0) }
+
+// parserAt reads what stands in src from a place on; its spans are those of
+// src.
+func parserAt(src string, start int) *parser {
+	p := &parser{scan: scanner{src: src, pos: start}, prev: Span{start, start}, err: unreadable(src[start:])}
+	if p.err != nil {
+		p.err.Marks[0].Start += start
+		p.err.Marks[0].End += start
+	}
 	p.advance(false)
 	return p
 }
