@@ -44,3 +44,11 @@ func lastBlank(line string, indent int) int {
 	}
 	return last
 }
+
+func foldedAll(lines []string) []string {
+	var out []string
+	for _, l := range lines {
+		out = append(out, folded(l)...)
+	}
+	return out
+}

@@ -100,7 +100,7 @@ func statementList() []string {
 		usage, _, _ := strings.Cut(st.usage, "  or  ")
 		rows = append(rows, []string{usage, st.summary})
 	}
-	return aligned(rows)
+	return foldedAll(aligned(rows))
 }
 
 func (st statement) lines() []string {
@@ -133,7 +133,7 @@ func (s *Session) functionList() []string {
 	var out []string
 	for _, section := range order {
 		out = append(out, section)
-		out = append(out, aligned(bySection[section])...)
+		out = append(out, foldedAll(aligned(bySection[section]))...)
 	}
 	return out
 }
@@ -151,11 +151,7 @@ func (s *Session) functionHelp(f *program.Function) []string {
 			lines = append(lines, "  "+part[0]+": "+part[1])
 		}
 	}
-	var out []string
-	for _, l := range lines {
-		out = append(out, folded(l)...)
-	}
-	return out
+	return foldedAll(lines)
 }
 
 // paramKind says in a few words what an argument is.

@@ -14,7 +14,7 @@ const inBandChain = `
 k = 0.5
 chain line
   band: 13.5 nm, 20 %
-  spectrum: λ/(13.5 nm)
+  spectrum: 3*λ/(13.5 nm)
   at IF
   falling: k*(2 - λ/(13.5 nm))
   at MASK
@@ -30,7 +30,7 @@ func powerMean(n float64) float64 {
 }
 
 // The factors in the band are the integrals of the polynomials, weighted by the
-// source x, and those of neighbours multiply.
+// source 3x, and those of neighbours multiply.
 func TestInBandFactors(t *testing.T) {
 	d := newDesk()
 	holds(t, d, inBandChain)
