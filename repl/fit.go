@@ -223,7 +223,7 @@ func (w *fitting) result(f *formulas) ([]Result, error) {
 	before := s.snapshot()
 	for i, n := range w.a.Names {
 		d := s.store.defs[n.Name]
-		v := s.value(w.fit.Values[i], d.node.Type, d.unit, nil)
+		v := s.value(w.fit.Values[i], d.node.Type, s.written(d), nil)
 		if w.fit.U != nil {
 			v.U, v.Uncertain, v.DoF = w.fit.U[i], true, float64(w.fit.DoF)
 		}
@@ -241,8 +241,8 @@ func (w *fitting) result(f *formulas) ([]Result, error) {
 // become replaces a definition by a literal with the value that was found.
 func (s *Session) become(j job, n syntax.Name, d *definition, v *Value) error {
 	bracket := ""
-	if d.unit != nil && !d.unit.IsOne() {
-		bracket = " [" + d.unit.String() + "]"
+	if written := s.written(d); written != nil && !written.IsOne() {
+		bracket = " [" + written.String() + "]"
 	}
 	unit := v.Unit
 	text := n.Name + bracket + " = " + literalOf(v, unit) + "  # found by: " + statementWithoutNote(j.text)
@@ -255,6 +255,34 @@ func (s *Session) become(j job, n syntax.Name, d *definition, v *Value) error {
 		return err
 	}
 	return s.install(fresh, n.Where)
+}
+
+// written is the unit in which a definition states its value: that of its
+// bracket, else that of the literal it is; nil for formulas.
+func (s *Session) written(d *definition) *units.Unit {
+	if d.unit != nil {
+		return d.unit
+	}
+	def, ok := d.action.(*syntax.Define)
+	if !ok {
+		return nil
+	}
+	x := def.X
+	for {
+		switch inner := x.(type) {
+		case *syntax.At:
+			x = inner.X
+			continue
+		case *syntax.Unary:
+			x = inner.X
+			continue
+		case *syntax.Literal:
+			if u, err := s.sys.Parse(inner.Unit); err == nil && !u.Point() {
+				return &u
+			}
+		}
+		return nil
+	}
 }
 
 // literalOf writes a value in full, as the language reads it; a minus stands

@@ -15,7 +15,7 @@ func (s *Session) near(word string) []string {
 	}
 	var list []guess
 	consider := func(w string) {
-		limit := 1 + len(word)/5
+		limit := min(1, len(word)-1) + len(word)/5
 		if far := spelling(strings.ToLower(word), strings.ToLower(w), limit); far <= limit {
 			list = append(list, guess{w, far})
 		}

@@ -153,7 +153,7 @@ func TestSweepRefusals(t *testing.T) {
 		{"sweep x = 1 .. 2 2.5 points : x", "a range has a whole number of points from 2 on", "write 41 points"},
 		{"sweep x = 1 .. 2 by 1, x = 3 .. 4 by 1 : x", "x is varied twice", "vary two names"},
 		{"sweep x = 1 .. 2 by 1, y = 1 .. 2 by 1, z = 1 .. 2 by 1 : x", "a sweep varies one or two names", "fix the others by definitions, or compare cases"},
-		{"sweep x = 1 .. 2 by 1, y = x .. 3 by 1 : x", "x is no name that is known here", "did you mean P or T?"},
+		{"sweep x = 1 .. 2 by 1, y = x .. 3 by 1 : x", "x is no name that is known here", "define it first: x = …"},
 		{"sweep pi = 1 .. 2 by 1 : pi", "pi is a constant of the language", "choose another name"},
 		{"sweep f = 1 .. 2 by 1 : f", "f is no single value that could be varied", "choose another name"},
 		{"sweep list = 1 .. 2 by 1 : list", "list is no single value that could be varied", "choose another name"},
