@@ -50,6 +50,8 @@ func graph() map[string]room {
 			ours:    []string{"repl", "repl/terminal", "repl/chart", "repl/page"},
 			outside: []string{"golang.org/x/term"},
 		},
+		// A module of its own, which measures the public packages.
+		"benchmarks": {ours: []string{"units", "euv", "repl"}, outside: []string{"github.com/expr-lang/expr"}},
 	}
 }
 
