@@ -3,6 +3,7 @@ package repl
 import (
 	"errors"
 	"fmt"
+	"slices"
 
 	"example.com/dosewright/repl/internal/program"
 	"example.com/dosewright/repl/internal/syntax"
@@ -137,12 +138,17 @@ func (s *Session) comparison(f *formulas, c *program.Checker, rows []compared) (
 	t := &Table{Columns: []Column{{"case", ""}}, Warnings: c.Warnings}
 	var base []float64
 	for _, w := range rows {
-		y, err := s.under(w.sets, f)
+		y, warnings, err := s.under(w.sets, f)
 		switch {
 		case err != nil && w.sets == nil:
 			return nil, s.blame(err, c)
 		case err != nil:
 			return nil, &syntax.Error{Marks: []syntax.Span{w.at}, Msg: "in case " + w.name + ": " + messageOf(s.blame(err, c)), Hint: "set other values in this case", Cause: err}
+		}
+		for _, said := range warnings {
+			if !slices.Contains(t.Warnings, said) {
+				t.Warnings = append(t.Warnings, said)
+			}
 		}
 		if base == nil {
 			base = y
@@ -166,7 +172,7 @@ func (s *Session) comparison(f *formulas, c *program.Checker, rows []compared) (
 }
 
 // under computes formulas with what a case sets.
-func (s *Session) under(sets map[string]*program.Node, f *formulas) ([]float64, error) {
+func (s *Session) under(sets map[string]*program.Node, f *formulas) (y []float64, warnings []string, err error) {
 	var names []string
 	for name := range sets {
 		names = append(names, name)
@@ -179,8 +185,10 @@ func (s *Session) under(sets map[string]*program.Node, f *formulas) ([]float64, 
 		return resolve(name)
 	}, program.Opening{})
 	if err != nil {
-		return nil, err
+		return nil, nil, err
 	}
-	y := make([]float64, len(f.nodes))
-	return y, p.RunAll(p.NewFrame(), nil, y)
+	y = make([]float64, len(f.nodes))
+	frame := p.NewFrame()
+	err = p.RunAll(frame, nil, y)
+	return y, frame.Warnings, err
 }

@@ -121,7 +121,7 @@ func (s *Session) propagate(j job) ([]Result, error) {
 	case d == nil || err != nil && j.ctx.Err() == nil: // an end of the context keeps what was computed
 		return nil, s.blame(err, c)
 	}
-	out := s.distribution(d, n.Type, unit, asked.Seed, c.Warnings)
+	out := s.distribution(d, n.Type, unit, asked.Seed, append(c.Warnings, in.warnings()...))
 	if out.chart, err = s.draw(a.Out, histogram(d, out.Mean.Unit, strings.TrimSpace(c.Said(a.Of.X)))); err != nil {
 		return nil, err
 	}

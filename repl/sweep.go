@@ -158,7 +158,9 @@ func (w *sweeping) units() {
 			slots[i] = v.from + part*(v.to-v.from)
 		}
 		out := make([]float64, len(w.f.nodes))
-		if w.p.RunAll(w.p.NewFrame(), slots, out) == nil || part == 0 {
+		frame := w.p.NewFrame()
+		if w.p.RunAll(frame, slots, out) == nil || part == 0 {
+			w.out.Warnings = append(w.out.Warnings, frame.Warnings...) // blocks of lanes keep none
 			for k, y := range out {
 				w.session.choose(w.f, k, y)
 			}

@@ -126,6 +126,14 @@ func (in *inputs) eval(k int) study.Eval {
 	}
 }
 
+// warnings are the doubts of one run at the inputs' values; blocks of lanes keep
+// none.
+func (in *inputs) warnings() []string {
+	frame := in.program.NewFrame()
+	_ = in.program.RunAll(frame, in.sources.Values(), make([]float64, in.program.Outputs())) // a refusal has been told
+	return frame.Warnings
+}
+
 func (in *inputs) firstOrder(ctx context.Context) (*study.Budget, error) {
 	return study.FirstOrder(ctx, in.eval(0), in.sources)
 }
