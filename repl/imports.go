@@ -79,11 +79,7 @@ func (s *Session) bringIn(ctx context.Context, file string, trail []string) erro
 	if most := s.limits.Imports; len(s.imports) >= most {
 		return fmt.Errorf("more than %d files are brought in, join some of them: %w: %w", most, ErrFile, &LimitError{"Imports", int64(most), int64(most) + 1})
 	}
-	text, err := readFile(s.config.Files, file)
-	if err != nil {
-		return err
-	}
-	list, err := transcript(file, text)
+	_, list, err := readSession(s.config.Files, file)
 	if err != nil {
 		return err
 	}

@@ -28,11 +28,7 @@ type Played struct {
 // config draws them. It writes nothing. The error says that the file cannot be
 // used; what was refused has the refusal in its reply.
 func Play(ctx context.Context, config Config, name string) ([]Played, error) {
-	text, err := readFile(config.Files, name)
-	if err != nil {
-		return nil, err
-	}
-	list, err := transcript(name, text)
+	_, list, err := readSession(config.Files, name)
 	if err != nil {
 		return nil, err
 	}

@@ -52,11 +52,7 @@ type Remark struct {
 // It writes nothing. The error says that the file cannot be used; drifts,
 // failed checks and refusals are in the result.
 func Replay(ctx context.Context, config Config, name string) (*Replayed, error) {
-	text, err := readFile(config.Files, name)
-	if err != nil {
-		return nil, err
-	}
-	list, err := transcript(name, text)
+	text, list, err := readSession(config.Files, name)
 	if err != nil {
 		return nil, err
 	}

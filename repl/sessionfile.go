@@ -53,6 +53,14 @@ func readFile(files fs.FS, name string) ([]byte, error) {
 	return text, nil
 }
 
+// readSession reads a session file and cuts it into what was said.
+func readSession(files fs.FS, name string) (text []byte, list []said, err error) {
+	if text, err = readFile(files, name); err == nil {
+		list, err = transcript(name, text)
+	}
+	return text, list, err
+}
+
 // transcript cuts a session file into what was said and what was answered.
 // Replies before anything said are passed over. It refuses what is no text.
 func transcript(name string, text []byte) ([]said, error) {

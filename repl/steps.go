@@ -26,11 +26,7 @@ type Step struct {
 
 // OpenSteps opens the session file of that name for stepping.
 func OpenSteps(config Config, name string) (*Steps, error) {
-	text, err := readFile(config.Files, name)
-	if err != nil {
-		return nil, err
-	}
-	list, err := transcript(name, text)
+	_, list, err := readSession(config.Files, name)
 	if err != nil {
 		return nil, err
 	}
